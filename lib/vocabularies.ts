@@ -3,6 +3,8 @@
  * and comes with a migration; none is renamed once rows hold it.
  */
 export { LABEL_STATES, type LabelState } from '@/lib/harmony/reading';
+export { SEGMENTATIONS, type Segmentation } from '@/lib/marking/rubric';
+export { VERDICTS, type Verdict } from '@/lib/marking/verdict';
 export { MODES, type Mode } from '@/lib/theory/key';
 export { QUALITIES, type Quality } from '@/lib/theory/chord';
 export { SPECIALS, type Special } from '@/lib/theory/numeral';
@@ -28,10 +30,6 @@ export type ReadingState = (typeof READING_STATES)[number];
 /** What colleagues may do with a reading that is not theirs. Answer keys and submissions have their own rules. */
 export const SHARINGS = ['private', 'comment', 'edit'] as const;
 export type Sharing = (typeof SHARINGS)[number];
-
-/** Whether a student is given the spans to name, or cuts them. */
-export const SEGMENTATIONS = ['given', 'open'] as const;
-export type Segmentation = (typeof SEGMENTATIONS)[number];
 
 export const ASSIGNMENT_STATES = ['draft', 'open', 'closed'] as const;
 export type AssignmentState = (typeof ASSIGNMENT_STATES)[number];

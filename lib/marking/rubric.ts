@@ -19,11 +19,15 @@ export interface Rubric {
   readonly shares: Readonly<Record<Part, number>>;
   /** Nothing is earned by the other parts while the root is wrong. */
   readonly rootFirst: boolean;
+  /** Root, quality and target earn only together: the numeral is right as a whole or not at all. */
+  readonly wholeNumeral: boolean;
+  /** Where a wrong seventh counts: as a matter of the chord's quality or of its figures. */
+  readonly seventhIn: 'quality' | 'inversion';
   /** Upper and lower case of the numeral are not told apart. */
   readonly caseIgnored: boolean;
   /** A wrong accidental before the numeral voids the label; otherwise it costs half of the root. */
   readonly accidentalVoids: boolean;
-  /** Share of `quality` for the right triad with its seventh overlooked, added or of the wrong kind. */
+  /** Share of that part for the right triad with its seventh overlooked, added or of the wrong kind. */
   readonly seventhCredit: number;
   /** Credit for the right numeral applied to the wrong chord, or to none. */
   readonly targetCredit: number;
@@ -49,6 +53,8 @@ const EVERY_PART: Rubric = {
   pointStep: 0.5,
   shares: { root: 3, quality: 2, inversion: 2, applied: 2, function: 1, key: 1, boundary: 1 },
   rootFirst: true,
+  wholeNumeral: false,
+  seventhIn: 'quality',
   caseIgnored: false,
   accidentalVoids: false,
   seventhCredit: 0.5,
@@ -72,7 +78,9 @@ export const RUBRIC_PRESETS = {
     rubric: {
       ...EVERY_PART,
       pointsPerLabel: 1,
-      shares: { root: 1, quality: 1, inversion: 2, applied: 0, function: 0, key: 0, boundary: 1 },
+      shares: { root: 1, quality: 0, inversion: 1, applied: 0, function: 0, key: 0, boundary: 0 },
+      wholeNumeral: true,
+      seventhIn: 'inversion',
       accidentalVoids: true,
       seventhCredit: 0,
       targetCredit: 0,
