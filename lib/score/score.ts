@@ -39,7 +39,35 @@ export interface TimeSignature {
   readonly start: Ticks;
 }
 
-/** A key signature as written: sharps positive, flats negative; weak evidence only. */
+/**
+ * A sign that changes the order in which bars are played, as written; `performedBars` plays it out.
+ * It stands at the start or the end of its bar.
+ */
+export interface PlayOrderSign {
+  readonly bar: number;
+  readonly at: 'start' | 'end';
+  readonly kind: PlayOrderKind;
+  /** `repeat-end`: how often the passage is played in all (2 unless written otherwise). */
+  readonly times: number;
+  /** `ending-start` and `ending-end`: for which passes, 1-based; empty for an ending without number. */
+  readonly passes: readonly number[];
+}
+
+export const PLAY_ORDER_KINDS = [
+  'repeat-start',
+  'repeat-end',
+  'ending-start',
+  'ending-end',
+  'segno',
+  'coda',
+  'da-capo',
+  'dal-segno',
+  'to-coda',
+  'fine',
+] as const;
+export type PlayOrderKind = (typeof PLAY_ORDER_KINDS)[number];
+
+/** A key signature as written, at concert pitch: sharps positive, flats negative; weak evidence only. */
 export interface KeySignature {
   readonly start: Ticks;
   readonly fifths: number;
@@ -51,7 +79,7 @@ export interface KeySignature {
  * notes and unpitched notes are not among them.
  */
 export interface Note {
-  /** Unique in the score: stable for the same file. */
+  /** Unique in the score, stable for the same file: its place in `Score.notes`. */
   readonly id: number;
   readonly pitch: Pitch;
   readonly start: Ticks;
@@ -90,7 +118,10 @@ export interface ScoreWarning {
 }
 
 export interface Score {
+  /** Of the movement where the file names one, or else of the work; '' where there is none. */
   readonly title: string;
+  /** The larger work the movement belongs to, '' where the file names none. */
+  readonly work: string;
   readonly composer: string;
   readonly ticksPerQuarter: number;
   readonly parts: readonly Part[];
@@ -99,6 +130,10 @@ export interface Score {
   readonly notes: readonly Note[];
   readonly graceNotes: readonly GraceNote[];
   readonly keySignatures: readonly KeySignature[];
+  /** Every change of metre, mid-bar ones included, sorted. */
+  readonly timeSignatures: readonly TimeSignature[];
+  /** Repeats, endings, da capo: kept as written. */
+  readonly playOrder: readonly PlayOrderSign[];
   readonly warnings: readonly ScoreWarning[];
 }
 
