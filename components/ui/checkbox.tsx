@@ -3,6 +3,12 @@
 import { type ComponentProps, type ReactNode, useId } from 'react';
 import { classNames } from './class-names';
 
+const BOX =
+  'mt-1 flex size-4.5 shrink-0 appearance-none items-center justify-center border border-rule-strong bg-sheet text-ink hover:border-ink ' +
+  'checked:border-ink disabled:bg-bench before:hidden before:bg-current checked:before:block';
+const TICK = 'rounded-plate before:size-3 before:[clip-path:polygon(12%_46%,0_60%,40%_96%,100%_18%,86%_6%,38%_70%)]';
+const DISC = 'rounded-full before:size-2.5 before:rounded-full';
+
 type ChoiceProps = Omit<ComponentProps<'input'>, 'type'> & { readonly label: ReactNode; readonly hint?: ReactNode };
 
 /** A box with its label; the whole row is the target. */
@@ -24,7 +30,7 @@ function Choice({ label, hint, className, type, ...rest }: ChoiceProps & { reado
         aria-describedby={hint ? `${id}-hint` : undefined}
         {...rest}
         type={type}
-        className="mt-1 size-4.5 shrink-0 accent-ink"
+        className={classNames(BOX, type === 'radio' ? DISC : TICK)}
       />
       <div>
         <label htmlFor={rest.id ?? id}>{label}</label>

@@ -16,7 +16,7 @@
  *  Spinner, Skeleton, SkeletonRows, Progress
  *  EmptyState, ErrorNote, WarningNote, SettledNote
  *  StateMark (STATES), Mark, ShapeIcon    state as shape + word + colour
- *  Tag, Breadcrumbs, PageHeader, Section, Facts, ThemeSwitch
+ *  Tag, Breadcrumbs, PageHeader, Section, Facts, ThemeSwitch, Wordmark
  */
 export { Breadcrumbs, type Crumb } from './breadcrumbs';
 export { BUTTON_KINDS, Button, type ButtonKind, ButtonLink, buttonClass } from './button';
@@ -39,3 +39,4 @@ export { Tag } from './tag';
 export { THEMES, type Theme, ThemeSwitch } from './theme-switch';
 export { Announcements, useAnnouncer } from './toast';
 export { Tooltip } from './tooltip';
+export { Wordmark } from './wordmark';

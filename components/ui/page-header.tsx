@@ -13,7 +13,7 @@ interface PageHeaderProps {
 export function PageHeader({ title, subtitle, crumbs, actions }: PageHeaderProps) {
   return (
     <header className="mb-6 border-b border-rule-strong pt-6 pb-4">
-      {crumbs ? <Breadcrumbs crumbs={crumbs} /> : null}
+      {crumbs ? <div className="mb-2"><Breadcrumbs crumbs={crumbs} /></div> : null}
       <div className="flex flex-wrap items-end justify-between gap-x-8 gap-y-3">
         <div className="min-w-0">
           <h1 className="text-display break-words">{title}</h1>
