@@ -10,7 +10,7 @@ const LOCK_WAIT = 60;
 export async function migrateDb(url: string, folder = path.resolve('drizzle')): Promise<void> {
   const connection = await createConnection({ uri: url, timezone: 'Z', charset: 'utf8mb4' });
   try {
-    await connection.query('SELECT GET_LOCK(?, ?)', ['understave-migrate', LOCK_WAIT]);
+    await connection.query("SELECT GET_LOCK(concat('migrate ', database()), ?)", [LOCK_WAIT]);
     await migrate(drizzle(connection), { migrationsFolder: folder });
   } finally {
     await connection.end();

@@ -1,5 +1,5 @@
-import { boolean, double, index, int, mysqlEnum, mysqlTable, text, uniqueIndex, varchar } from 'drizzle-orm/mysql-core';
-import { ASSIGNMENT_STATES, SEGMENTATIONS, SUBMISSION_STATES } from '@/lib/vocabularies';
+import { boolean, double, index, int, mysqlEnum, mysqlTable, text, uniqueIndex } from 'drizzle-orm/mysql-core';
+import { ASSIGNMENT_STATES, SEGMENTATIONS, SUBMISSION_STATES, VERDICTS } from '@/lib/vocabularies';
 import { createdAt, id, json, shortText, updatedAt, utcDateTime } from '../columns';
 import { courses } from './courses';
 import { users } from './departments';
@@ -24,6 +24,8 @@ export const assignments = mysqlTable(
     segmentation: mysqlEnum('segmentation', SEGMENTATIONS).notNull().default('given'),
     /** The key regions are shown to the student. */
     keysGiven: boolean('keys_given').notNull().default(true),
+    /** Labels that are not asked are printed for the student, as a start; else their spans are empty. */
+    othersGiven: boolean('others_given').notNull().default(true),
     pointsPerLabel: double('points_per_label').notNull().default(1),
     /** lib/marking's rubric. */
     rubric: json<object>('rubric').notNull().$default(() => ({})),
@@ -84,13 +86,13 @@ export const marks = mysqlTable(
     keyLabelId: id('key_label_id').references(() => labels.id, { onDelete: 'set null' }),
     startTick: int('start_tick').notNull(),
     endTick: int('end_tick').notNull(),
-    verdict: varchar('verdict', { length: 40 }).notNull(),
+    verdict: mysqlEnum('verdict', VERDICTS).notNull(),
     points: double('points').notNull(),
     maxPoints: double('max_points').notNull(),
     /** The span mark of lib/marking as proposed, whole. */
     proposed: json<object>('proposed').notNull(),
     overridePoints: double('override_points'),
-    overrideVerdict: varchar('override_verdict', { length: 40 }),
+    overrideVerdict: mysqlEnum('override_verdict', VERDICTS),
     remark: text('remark'),
     reasons: json<readonly string[]>('reasons').notNull().$default(() => []),
     markedBy: id('marked_by').references(() => users.id),

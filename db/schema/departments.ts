@@ -49,7 +49,8 @@ export const accounts = mysqlTable(
     userId: id('user_id')
       .notNull()
       .references(() => users.id, { onDelete: 'cascade' }),
-    provider: varchar('provider', { length: 60 }).notNull(),
+    /** The issuer's address. */
+    provider: binaryText('provider', 255).notNull(),
     providerAccountId: binaryText('provider_account_id', 255).notNull(),
     createdAt: createdAt(),
   },

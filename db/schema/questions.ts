@@ -1,5 +1,6 @@
 import { double, int, mysqlTable, uniqueIndex } from 'drizzle-orm/mysql-core';
-import { id } from '../columns';
+import type { Framed } from '@/lib/marking/key-reading';
+import { id, json } from '../columns';
 import { assignments } from './assignments';
 
 /**
@@ -16,6 +17,8 @@ export const questions = mysqlTable(
     startTick: int('start_tick').notNull(),
     /** Full marks; null: the assignment's points per label. */
     points: double('points'),
+    /** What is right beside the key's label. Kept here, not with the key's labels: editing the key must not lose them. */
+    alternatives: json<readonly Framed[]>('alternatives').notNull().$default(() => []),
   },
   (t) => [uniqueIndex('questions_span').on(t.assignmentId, t.startTick)],
 );

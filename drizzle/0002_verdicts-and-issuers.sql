@@ -1,0 +1,4 @@
+ALTER TABLE `accounts` MODIFY COLUMN `provider` varchar(255) CHARACTER SET utf8mb4 COLLATE utf8mb4_bin NOT NULL;--> statement-breakpoint
+ALTER TABLE `labels` MODIFY COLUMN `special` enum('cadential-six-four','passing-six-four','pedal-six-four','arpeggiated-six-four','neapolitan','common-tone','pedal-tone');--> statement-breakpoint
+ALTER TABLE `marks` MODIFY COLUMN `verdict` enum('as-keyed','alternative','other-frame','partly','not-this','blank') NOT NULL;--> statement-breakpoint
+ALTER TABLE `marks` MODIFY COLUMN `override_verdict` enum('as-keyed','alternative','other-frame','partly','not-this','blank');
