@@ -1,0 +1,84 @@
+import type { Pitch } from '../theory/pitch';
+import { ROUNDING_PER_QUARTER } from './bars';
+import type { Draft, WrittenNote } from './draft';
+import type { Bar } from './score';
+
+/** A sounding note before it has its id: times in ticks from the start of the score. */
+export interface PlacedNote {
+  readonly pitch: Pitch;
+  readonly start: number;
+  duration: number;
+  readonly part: number;
+  readonly staff: number;
+  readonly voice: string;
+  readonly attacks: number[];
+  /** Places in `Draft.notes` of the written notes it is made of. */
+  readonly written: number[];
+}
+
+/**
+ * Written notes → sounding notes. A note that ends a tie lengthens the note of the same part and spelled pitch that
+ * begins one and ends where it starts; in the same voice before any other. A tie that leads nowhere (into a second
+ * ending, over a rest, let-ring) joins nothing. Ties between different spellings join nothing: spelling is kept.
+ */
+export function mergeTies(draft: Draft, bars: readonly Bar[]): PlacedNote[] {
+  const placed: PlacedNote[] = [];
+  const open = new Map<string, PlacedNote[]>();
+  for (const index of orderInTime(draft, bars)) {
+    const written = draft.notes[index] as WrittenNote;
+    const bar = bars[written.bar] as Bar;
+    const start = bar.start + Math.min(written.at, bar.length);
+    const duration = bar.start + endInBar(draft, written, bar) - start;
+    const joined = written.tieStop ? takeOpen(open, written, start) : undefined;
+    const note = joined ? lengthen(joined, start, duration, index) : place(written, start, duration, index);
+    if (!joined) placed.push(note);
+    if (written.tieStart) keepOpen(open, written, note);
+  }
+  return placed;
+}
+
+function orderInTime(draft: Draft, bars: readonly Bar[]): number[] {
+  const startOf = (index: number) => {
+    const { bar, at } = draft.notes[index] as WrittenNote;
+    return (bars[bar] as Bar).start + at;
+  };
+  return draft.notes.map((_, index) => index).sort((a, b) => startOf(a) - startOf(b) || a - b);
+}
+
+/** In a bar whose sum was rounded, the last notes end with the bar. */
+function endInBar(draft: Draft, { at, duration }: WrittenNote, bar: Bar): number {
+  const end = at + duration;
+  const written = draft.bars[bar.index]?.length;
+  if (written === bar.length) return end;
+  return Math.abs(end - bar.length) * ROUNDING_PER_QUARTER <= draft.ticksPerQuarter ? bar.length : end;
+}
+
+function place({ pitch, part, staff, voice }: WrittenNote, start: number, duration: number, index: number): PlacedNote {
+  return { pitch, start, duration, part, staff, voice, attacks: [start], written: [index] };
+}
+
+function lengthen(note: PlacedNote, start: number, duration: number, index: number): PlacedNote {
+  note.duration = start + duration - note.start;
+  note.attacks.push(start);
+  note.written.push(index);
+  return note;
+}
+
+function nameOf({ part, pitch }: WrittenNote): string {
+  return `${part}/${pitch.fifths}/${pitch.octave}`;
+}
+
+function keepOpen(open: Map<string, PlacedNote[]>, written: WrittenNote, note: PlacedNote): void {
+  const name = nameOf(written);
+  const same = open.get(name);
+  if (same) same.push(note);
+  else open.set(name, [note]);
+}
+
+function takeOpen(open: Map<string, PlacedNote[]>, written: WrittenNote, start: number): PlacedNote | undefined {
+  const candidates = open.get(nameOf(written))?.filter((note) => note.start + note.duration >= start) ?? [];
+  const fitting = candidates.filter((note) => note.start + note.duration === start);
+  const chosen = fitting.find(({ voice, staff }) => voice === written.voice && staff === written.staff) ?? fitting[0];
+  open.set(nameOf(written), candidates.filter((note) => note !== chosen));
+  return chosen;
+}
