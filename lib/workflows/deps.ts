@@ -1,18 +1,16 @@
 import { randomUUID } from 'node:crypto';
-import pino from 'pino';
 import { type Db, createDb } from '@/db/client';
 import { type Config, getConfig } from '@/lib/config';
+import { type Log, createLog } from '@/lib/log';
+import type { ObjectStore } from '@/lib/storage/object-store';
+import { createS3Store } from '@/lib/storage/s3-store';
 
-/** What a log line may be made of: ids, codes, counts, durations. Never a name, an e-mail, an address, a text or a mark. */
-export interface Log {
-  info(fields: object, message: string): void;
-  warn(fields: object, message: string): void;
-  error(fields: object, message: string): void;
-}
+export type { Log };
 
 /** Everything a workflow reaches outside itself. Tests make their own with the real database and a fixed clock. */
 export interface Deps {
   readonly db: Db;
+  readonly storage: ObjectStore;
   readonly log: Log;
   /** Scheme, host and port; links in mails start with it. */
   readonly appUrl: string;
@@ -31,7 +29,8 @@ export function inTransaction<T>(deps: Deps, work: (deps: Deps) => Promise<T>): 
 function openDeps(config: Config): Deps {
   return {
     db: createDb(config.databaseUrl).db,
-    log: pino({ level: config.logLevel, base: null }),
+    storage: createS3Store(config.store),
+    log: createLog(config.logLevel),
     appUrl: config.appUrl,
     secret: config.authSecret,
     now: () => new Date(),
