@@ -15,8 +15,12 @@ export const SPECIALS = [
   'arpeggiated-six-four',
   'neapolitan',
   'common-tone',
+  'pedal-tone',
 ] as const;
 export type Special = (typeof SPECIALS)[number];
+
+export const ADDED_TONES = ['sus2', 'sus4', 'add4', 'add6', 'add9'] as const;
+export type AddedTone = (typeof ADDED_TONES)[number];
 
 /**
  * A Roman numeral as a value.
@@ -26,7 +30,10 @@ export type Special = (typeof SPECIALS)[number];
  * The cadential six-four is the tonic triad (degree 1, inversion 2) with its special, however a convention prints it.
  * Augmented sixths: degree {4, +1} for Italian and German (root the raised fourth), {2, 0} for French; the usual
  * position, flat sixth in the bass, is inversion 1, 1 and 2.
- * `added`: tones over the plain chord ('add6', 'sus4', 'sus2'); a ninth is part of the quality.
+ * The major triad on the lowered second (and its major seventh) is always `neapolitan`. The common-tone °7 is spelled
+ * on the raised second of the key it embellishes, degree {2, +1}. `pedal-tone` is the held tone alone, quality `other`.
+ * `added`: tones over the plain chord, in the order of ADDED_TONES, each diatonic in the key of `applied[0]` or the
+ * local key; `sus` tones stand for the third. The ninth of a dominant is part of the quality.
  */
 export interface Numeral {
   readonly degree: Degree;
@@ -34,7 +41,7 @@ export interface Numeral {
   readonly inversion: 0 | 1 | 2 | 3 | 4;
   readonly applied: readonly Target[];
   readonly special: Special | null;
-  readonly added: readonly ('add6' | 'sus4' | 'sus2')[];
+  readonly added: readonly AddedTone[];
 }
 
 export type { Mode };
