@@ -165,5 +165,6 @@ export const SCORE_ERROR_CODES = [
   'bad_note',
   'duplicate_part',
   'timed_out',
+  'out_of_memory',
 ] as const;
 export type ScoreErrorCode = (typeof SCORE_ERROR_CODES)[number];
