@@ -3,12 +3,8 @@ import type { Db } from '@/db/client';
 import { accounts, departmentMembers, departments, users } from '@/db/schema';
 import type { UserPreferences } from '@/db/schema/departments';
 import type { Actor } from '@/lib/auth/actor';
+import { normalEmail } from '@/lib/auth/email';
 import type { Role } from '@/lib/vocabularies';
-
-/** E-mails are compared in this form. */
-export function normalEmail(email: string): string {
-  return email.trim().normalize('NFC').toLowerCase();
-}
 
 export interface Membership {
   readonly departmentId: string;

@@ -134,6 +134,10 @@ function isBegan(value: SessionBegan | undefined): value is SessionBegan {
   return value !== undefined && SIGN_IN_METHODS.includes(value.method);
 }
 
+function logCode(code: string): void {
+  createDeps().log.warn({ endpoint: 'next-auth', code }, 'next-auth says');
+}
+
 let options: NextAuthOptions | undefined;
 
 export function getAuthOptions(): NextAuthOptions {
@@ -146,6 +150,8 @@ export function getAuthOptions(): NextAuthOptions {
     pages: { signIn: '/sign-in', error: '/sign-in', signOut: '/sign-in' },
     providers: providers(config.oidc),
     callbacks: { signIn, jwt, session },
+    // Its own logger would print what a provider sent.
+    logger: { error: logCode, warn: logCode, debug: () => undefined },
   };
   return options;
 }

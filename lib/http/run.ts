@@ -2,7 +2,9 @@ import { z } from 'zod';
 import { databaseErrorCode } from '@/db/client';
 import type { Actor, Visitor } from '@/lib/auth/actor';
 import { type AppError, appError, messageOf } from '@/lib/errors';
+import { describeError } from '@/lib/log';
 import { type Result, err, ok } from '@/lib/result';
+import { StoreError } from '@/lib/storage/object-store';
 import type { Deps } from '@/lib/workflows/deps';
 import type { Endpoint, Permission } from './endpoint';
 
@@ -77,17 +79,11 @@ const UNREACHABLE = new Set(['ECONNREFUSED', 'ECONNRESET', 'ETIMEDOUT', 'EPIPE',
 /** Turns a thrown bug into an answer; the log gets ids and the error's name, never the input. */
 export function errorOfThrown(deps: Deps, name: string, actor: Actor | null, thrown: unknown): AppError {
   const code = databaseErrorCode(thrown);
-  const unavailable = code !== null && UNREACHABLE.has(code);
+  const unavailable = thrown instanceof StoreError || (code !== null && UNREACHABLE.has(code));
+  const who = actor ? { userId: actor.userId, departmentId: actor.departmentId } : {};
   deps.log.error(
-    { endpoint: name, userId: actor?.userId, departmentId: actor?.departmentId, databaseError: code, stack: stackOf(thrown) },
+    { endpoint: name, ...who, ...describeError(thrown) },
     unavailable ? 'a part is not answering' : 'an endpoint threw',
   );
   return appError(unavailable ? 'unavailable' : 'internal');
-}
-
-/** Where it happened, without the message: drizzle's messages carry the query's parameters. */
-function stackOf(thrown: unknown): string | undefined {
-  if (!(thrown instanceof Error)) return undefined;
-  const frames = thrown.stack?.split('\n').filter((line) => /^\s+at /.test(line));
-  return [thrown.name, ...(frames ?? []).slice(0, 8)].join('\n');
 }

@@ -1,7 +1,7 @@
 import { eq } from 'drizzle-orm';
 import { countFailedAttempts, deleteAttemptsBefore } from '@/db/queries/sign-in';
-import { normalEmail } from '@/db/queries/users';
 import { signInAttempts } from '@/db/schema';
+import { normalEmail } from '@/lib/auth/email';
 import { LIMITS, LONGEST_WINDOW, isOverLimit } from '@/lib/auth/rate-limit';
 import { keyedHash } from '@/lib/auth/token';
 import { type AppError, appError } from '@/lib/errors';
