@@ -1,4 +1,5 @@
-import { type Fifths, fifths, formatPitchClass, formatPitchClassForPeople } from './pitch';
+import { type Result, err, ok } from '../result';
+import { type Fifths, type Letter, fifths, fifthsOf, formatPitchClass, formatPitchClassForPeople } from './pitch';
 
 export const MODES = ['major', 'minor'] as const;
 export type Mode = (typeof MODES)[number];
@@ -61,4 +62,44 @@ export function formatKeyForPeople(key: Key): string {
 
 export function equalKeys(a: Key, b: Key): boolean {
   return a.tonic === b.tonic && a.mode === b.mode;
+}
+
+/** `offset` is 0-based in the text as typed. */
+export interface KeyError {
+  readonly offset: number;
+  readonly message: string;
+}
+
+const TONIC = /^\s*([A-Ga-g])[\s-]*(sharp|flat|##|#|bb|b|♯♯|♯|♭♭|♭|𝄪|𝄫)?/u;
+const MODE = /^\s*(major|minor|maj\.?|min\.?)?\s*$/i;
+const ALTERS: Readonly<Record<string, number>> = { sharp: 1, '#': 1, '♯': 1, '##': 2, '♯♯': 2, '𝄪': 2, flat: -1, b: -1, '♭': -1, bb: -2, '♭♭': -2, '𝄫': -2 };
+
+/**
+ * Reads `Eb major`, `c# minor`, `f♯ minor`, `B-flat major`, `F sharp minor`, and a tonic alone, where a capital is
+ * major and a small letter minor: `Eb`, `c#`. When the mode is written, the tonic's case says nothing.
+ */
+export function parseKey(text: string): Result<Key, KeyError> {
+  const tonic = TONIC.exec(text);
+  if (!tonic) return err({ offset: text.length - text.trimStart().length, message: 'A key begins with its tonic, a letter from A to G: Eb major, c# minor.' });
+  const [taken, letter = '', sign = ''] = tonic;
+  const mode = MODE.exec(text.slice(taken.length));
+  if (!mode) return err({ offset: taken.length, message: `Expected “major” or “minor” after the tonic ${taken.trim()}.` });
+  const isCapital = letter === letter.toUpperCase();
+  const key: Key = { tonic: fifthsOf(letter.toUpperCase() as Letter, ALTERS[sign] ?? 0), mode: modeOfWord(mode[1], isCapital) };
+  return ok(key);
+}
+
+function modeOfWord(word: string | undefined, isCapital: boolean): Mode {
+  if (word) return word.toLowerCase().startsWith('maj') ? 'major' : 'minor';
+  return isCapital ? 'major' : 'minor';
+}
+
+/** The thirty keys with up to seven sharps or flats, from the flat side to the sharp side, major before minor. */
+export const KEYS: readonly Key[] = Array.from({ length: 15 }, (_, i) => i - 7).flatMap((signature) =>
+  MODES.map((mode) => ({ tonic: fifths(mode === 'major' ? signature : signature + 3), mode })),
+);
+
+/** Whether the key has a signature that is written in practice (at most seven sharps or flats). */
+export function isWrittenKey(key: Key): boolean {
+  return Math.abs(signatureOf(key)) <= 7;
 }
