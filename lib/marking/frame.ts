@@ -1,18 +1,34 @@
+import { keyOfNumeral } from '../theory/applied';
 import { type Key, fifthsOfDegree } from '../theory/key';
-import type { Fifths } from '../theory/pitch';
 import type { Numeral } from '../theory/numeral';
+import { type Fifths, pitchClassOf } from '../theory/pitch';
+import { spellNumeral } from '../theory/spell';
 import type { Framed } from './key-reading';
 
 /** The key a chord is heard in for its moment: that of the applied chord's target, or else the local key. */
 export function tonicisedKey(framed: Framed): Key {
-  return [...framed.numeral.applied]
-    .reverse()
-    .reduce((key: Key, target) => ({ tonic: fifthsOfDegree(key, target.degree), mode: target.mode }), framed.key);
+  return keyOfNumeral(framed.key, framed.numeral);
 }
 
 /** The spelled root. For augmented sixths and CT°7 it is a convention, not a sounding root: compare those by type. */
 export function rootOf(framed: Framed): Fifths {
   return fifthsOfDegree(tonicisedKey(framed), framed.numeral.degree);
+}
+
+/** The written notes of a chord, in the order of the line of fifths. */
+export function tonesOf(framed: Framed): Fifths[] {
+  return spellNumeral(framed.key, framed.numeral).tones.map((tone) => tone.fifths).sort((a, b) => a - b);
+}
+
+export function bassOf(framed: Framed): Fifths {
+  return spellNumeral(framed.key, framed.numeral).bass;
+}
+
+/** The two sound alike and are written with other notes. */
+export function areEnharmonic(a: Framed, b: Framed): boolean {
+  const sound = (tones: readonly Fifths[]) => tones.map(pitchClassOf).sort((x, y) => x - y).join();
+  const [ours, theirs] = [tonesOf(a), tonesOf(b)];
+  return ours.join() !== theirs.join() && sound(ours) === sound(theirs);
 }
 
 /** One string per numeral value: equal strings, equal numerals. Not for people. */

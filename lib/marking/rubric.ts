@@ -29,7 +29,7 @@ export interface Rubric {
   readonly accidentalVoids: boolean;
   /** Share of that part for the right triad with its seventh overlooked, added or of the wrong kind. */
   readonly seventhCredit: number;
-  /** Credit for the right numeral applied to the wrong chord, or to none. */
+  /** Share of the credit that is left for the right numeral applied to the wrong chord: V7/IV for V7/V. */
   readonly targetCredit: number;
   /** Credit for the same chord tonicised where the key modulates, or the other way round. */
   readonly frameCredit: number;
