@@ -2,8 +2,8 @@ import localFont from 'next/font/local';
 
 /*
  * Alegreya for text and numerals, Alegreya Sans for controls and tables, Alegreya Sans SC for small capitals, all from
- * their npm packages (OFL, see NOTICE). The Latin subsets hold ° ø + but not ♭ ♯ ♮: those, and the double signs, come
- * from Bravura Text through a unicode-range, so that the file is fetched only by a page that prints one.
+ * their npm packages (OFL, see NOTICE). They hold ° ø + but not ♭ ♯ ♮ nor the double signs: those are our own drawings,
+ * two kilobytes (lib/theory/sign-outlines.ts, made into a font by lib/cli/draw-signs.ts).
  */
 export const book = localFont({
   src: [
@@ -61,19 +61,12 @@ export const caps = localFont({
   adjustFontFallback: 'Arial',
 });
 
-/** Drawn for a staff, the signs stand 0.9 em high; beside capitals of 0.64 em they are set at 72 %. */
 export const signs = localFont({
-  src: [{ path: '../node_modules/@vexflow-fonts/bravuratext/bravuratext.woff2', weight: '400', style: 'normal' }],
+  src: [{ path: './fonts/understave-signs.otf', weight: '400', style: 'normal' }],
   variable: '--font-signs',
   display: 'swap',
-  preload: false,
   adjustFontFallback: false,
-  declarations: [
-    { prop: 'unicode-range', value: 'U+266D-266F,U+1D12A-1D12B' },
-    { prop: 'size-adjust', value: '72%' },
-    { prop: 'ascent-override', value: '90%' },
-    { prop: 'descent-override', value: '30%' },
-  ],
+  declarations: [{ prop: 'unicode-range', value: 'U+266D-266F,U+1D12A-1D12B' }],
 });
 
 /** Class names that put every font variable on the root element. */
