@@ -101,6 +101,11 @@ export function canCreateCourse(actor: Actor): boolean {
   return actor.role === 'owner' || actor.role === 'instructor';
 }
 
+/** Join a course by its code. */
+export function canJoinCourse(actor: Actor): boolean {
+  return actor.role === 'student';
+}
+
 /** `courseRole` is the actor's in the course, null when the actor is not in it. */
 export function canSeeCourse(actor: Actor, courseRole: CourseRole | null): boolean {
   return actor.role === 'owner' || courseRole !== null;
