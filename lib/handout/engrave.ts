@@ -42,7 +42,7 @@ const OPTIONS = {
   // Ids are random otherwise, and the same order would not give the same drawing.
   xmlIdSeed: 1,
   lyricSize: 4,
-  harmDist: 1.5,
+  harmDist: 2.5,
   spacingStaff: 10,
 } as const;
 
