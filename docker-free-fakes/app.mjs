@@ -7,9 +7,12 @@ import { NEXT, ROOT, TYPESCRIPT } from './places.mjs';
 import { isRunning, runQuietly, spawnOwned } from './processes.mjs';
 import { SetupError } from './steps.mjs';
 
+/** Node 20 is what Debian 12 machines have; that the AWS SDK will ask for a newer one in 2027 need not fill the logs. */
+const QUIET = { NEXT_TELEMETRY_DISABLED: '1', AWS_SDK_JS_NODE_VERSION_SUPPORT_WARNING_DISABLED: 'true' };
+
 /** Runs one of our TypeScript programs quietly to its end; what it printed is returned, or shown when it failed. */
 export async function runProgram(file, env, args = []) {
-  const { code, output } = await runQuietly(process.execPath, [...TYPESCRIPT, file, ...args], { cwd: ROOT, env });
+  const { code, output } = await runQuietly(process.execPath, [...TYPESCRIPT, file, ...args], { cwd: ROOT, env: { ...env, ...QUIET } });
   if (code !== 0) throw new SetupError(`${file} failed (exit ${code}):\n${output}`);
   return output;
 }
@@ -57,7 +60,7 @@ export async function build(distDir, env) {
   const sources = hashSources();
   rmSync(stampOf(distDir), { force: true });
   mkdirSync(path.join(ROOT, distDir), { recursive: true });
-  const buildEnv = { ...env, NODE_ENV: 'production', NEXT_DIST_DIR: distDir, NEXT_TELEMETRY_DISABLED: '1' };
+  const buildEnv = { ...env, NODE_ENV: 'production', NEXT_DIST_DIR: distDir, ...QUIET };
   const { code, output } = await runQuietly(process.execPath, [NEXT, 'build'], { cwd: ROOT, env: buildEnv });
   if (code !== 0) throw new SetupError(`The build failed (exit ${code}):\n${output}`);
   writeFileSync(stampOf(distDir), sources);
@@ -65,11 +68,11 @@ export async function build(distDir, env) {
 
 export function startWeb({ mode, port, env, logFile }) {
   const args = [NEXT, mode, '-H', '127.0.0.1', '-p', String(port)];
-  return spawnOwned(process.execPath, args, { cwd: ROOT, env: { ...env, NEXT_TELEMETRY_DISABLED: '1' }, logFile });
+  return spawnOwned(process.execPath, args, { cwd: ROOT, env: { ...env, ...QUIET }, logFile });
 }
 
 export function startWorker({ env, logFile }) {
-  return spawnOwned(process.execPath, [...TYPESCRIPT, 'lib/cli/worker.ts'], { cwd: ROOT, env, logFile });
+  return spawnOwned(process.execPath, [...TYPESCRIPT, 'lib/cli/worker.ts'], { cwd: ROOT, env: { ...env, ...QUIET }, logFile });
 }
 
 function endOf(logFile) {

@@ -51,7 +51,9 @@ export function describeError(error: unknown): LogFields {
   if (!(error instanceof Error)) return { error: typeof error };
   const frames = (error.stack ?? '').split('\n').filter((line) => /^\s+at /.test(line));
   const code = codeOf(error);
-  return { error: error.name, ...(code ? { code } : {}), stack: frames.slice(0, 8).map((line) => line.trim()).join(' < ') };
+  const names = [error.name];
+  for (let cause = error.cause; cause instanceof Error; cause = cause.cause) names.push(cause.name);
+  return { error: names.join(' < '), ...(code ? { code } : {}), stack: frames.slice(0, 8).map((line) => line.trim()).join(' < ') };
 }
 
 function codeOf(error: unknown): string | undefined {

@@ -141,18 +141,21 @@ export async function unsafeFindScoreFile(db: Db, scoreId: string) {
       departmentId: scores.departmentId,
       sha256: scores.sha256,
       state: scores.state,
+      fileName: scores.fileName,
       title: scores.title,
       composer: scores.composer,
+      work: scores.work,
     })
     .from(scores)
     .where(and(eq(scores.id, scoreId), isNull(scores.deletedAt)));
   return row ?? null;
 }
 
-/** What reading a file gave. `title` and `composer` are written only where the uploader left them empty. */
+/** What reading a file gave. `title`, `composer` and `work` are written only where the uploader left them empty. */
 export interface ReadScoreFacts {
   readonly title: string;
   readonly composer: string;
+  readonly work: string;
   readonly ticksPerQuarter: number;
   readonly bars: readonly ScoreBar[];
   readonly noteCount: number;

@@ -20,7 +20,8 @@ function createClient(config: StoreConfig): S3Client {
     region: config.region,
     forcePathStyle: config.forcePathStyle,
     ...(config.endpoint ? { endpoint: config.endpoint } : {}),
-    ...(config.credentials ? { credentials: config.credentials } : {}),
+    // A copy: the client writes into what it is given.
+    ...(config.credentials ? { credentials: { ...config.credentials } } : {}),
     // The default adds trailing checksums, which S3-compatible stores have written into the object; we check our own.
     requestChecksumCalculation: 'WHEN_REQUIRED',
     responseChecksumValidation: 'WHEN_REQUIRED',
