@@ -1,0 +1,77 @@
+import { type Key, isWrittenKey, signatureOf } from './key';
+import type { Numeral } from './numeral';
+import { type Fifths, fifths, pitchClassOf } from './pitch';
+import { type SpelledChord, spellNumeral } from './spell';
+
+/** The same sound read in another key: the key, the numeral, and how the tones are then spelled, from the bass up. */
+export interface EnharmonicReading {
+  readonly key: Key;
+  readonly numeral: Numeral;
+  readonly chord: SpelledChord;
+}
+
+const LEADING_TONE_SEVENTH = { quality: 'diminished-seventh', applied: [], special: null, added: [] } as const;
+const DOMINANT = { degree: { step: 5, alter: 0 }, quality: 'dominant-seventh', applied: [], special: null, added: [] } as const;
+const GERMAN = { degree: { step: 4, alter: 1 }, quality: 'augmented-sixth-german', applied: [], special: null, added: [] } as const;
+
+/**
+ * Every key in which the sounding chord of a numeral is something else: a fully diminished seventh is vii°7 in four
+ * minor keys, each inversion of it the root position of another; a dominant seventh sounds as a German sixth and back.
+ * The reading in the numeral's own frame comes first, with its spelling, then the others by bass tone from root position
+ * on. Keys are those with a written signature, the fewest accidentals first. [] for other chords.
+ * Source: Integrated Musicianship: Theory, ch. 20a.
+ */
+export function enharmonicReadings(key: Key, numeral: Numeral): EnharmonicReading[] {
+  const chord = spellNumeral(key, numeral);
+  if (numeral.quality === 'diminished-seventh') return diminishedReadings(chord);
+  if (numeral.quality === 'dominant-seventh') return [germanReading(chord)];
+  return numeral.quality === 'augmented-sixth-german' ? [dominantReading(chord)] : [];
+}
+
+/** Each of the four sounding tones can be the leading tone. In close position from the bass up the roots alternate with the inversions 0, 3, 2, 1. */
+function diminishedReadings({ tones, bass, root }: SpelledChord): EnharmonicReading[] {
+  const bassIndex = tones.findIndex((tone) => tone.fifths === bass);
+  return [0, 3, 2, 1].map((above) => {
+    const leading = tones[(bassIndex + above) % 4]?.fifths as Fifths;
+    const inversion = ((4 - above) % 4) as Numeral['inversion'];
+    const tonic = leading === root ? fifths(root - 5) : writtenTonic(pitchClassOf(fifths(leading - 5)), 'minor', root - 5);
+    return readingOf({ tonic, mode: 'minor' }, { ...LEADING_TONE_SEVENTH, degree: { step: 7, alter: 1 }, inversion });
+  });
+}
+
+/** V7 sounds like the German sixth in the key a half step below its tonic: GBDF, of C, is GBDE♯ in B. */
+function germanReading({ root, bass, tones }: SpelledChord): EnharmonicReading {
+  const tonic = writtenTonic((pitchClassOf(root) + 4) % 12, 'major', root + 4);
+  const inversion = germanInversionOf(tones.findIndex((tone) => tone.fifths === bass), root, tones);
+  return readingOf({ tonic, mode: 'major' }, { ...GERMAN, inversion });
+}
+
+/** The dominant's members in the German sixth: root is the flat sixth (inversion 1), third do (2), fifth me (3), seventh fi (0). */
+function germanInversionOf(bassIndex: number, root: Fifths, tones: SpelledChord['tones']): Numeral['inversion'] {
+  const rootIndex = tones.findIndex((tone) => tone.fifths === root);
+  const member = (bassIndex - rootIndex + 4) % 4;
+  return ((member + 1) % 4) as Numeral['inversion'];
+}
+
+/** The German sixth in C, A♭CE♭F♯, sounds like V7 of D♭: its flat sixth is the dominant's root. */
+function dominantReading({ tones, bass }: SpelledChord): EnharmonicReading {
+  const flatSixth = tones.find((tone) => tone.role === 'third')?.fifths as Fifths;
+  const ordered = ['third', 'fifth', 'seventh', 'root'];
+  const inversion = ordered.indexOf(tones.find((tone) => tone.fifths === bass)?.role ?? '') as Numeral['inversion'];
+  const tonic = writtenTonic((pitchClassOf(flatSixth) + 5) % 12, 'major', flatSixth - 1);
+  return readingOf({ tonic, mode: 'major' }, { ...DOMINANT, inversion });
+}
+
+/** Of the spellings of a tonic, the written key with the fewest accidentals; between equals, the nearer on the line. */
+function writtenTonic(pitchClass: number, mode: Key['mode'], near: number): Fifths {
+  const spellings = Array.from({ length: 29 }, (_, i) => fifths(i - 14)).filter((f) => pitchClassOf(f) === pitchClass);
+  const written = spellings.filter((tonic) => isWrittenKey({ tonic, mode }));
+  const accidentals = (tonic: Fifths) => Math.abs(signatureOf({ tonic, mode }));
+  const best = written.toSorted((a, b) => accidentals(a) - accidentals(b) || Math.abs(a - near) - Math.abs(b - near))[0];
+  if (best === undefined) throw new Error(`no written key on pitch class ${pitchClass}`);
+  return best;
+}
+
+function readingOf(key: Key, numeral: Numeral): EnharmonicReading {
+  return { key, numeral, chord: spellNumeral(key, numeral) };
+}
