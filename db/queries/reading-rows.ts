@@ -1,12 +1,12 @@
 import { asc, eq, inArray } from 'drizzle-orm';
 import type { Db } from '@/db/client';
-import { keyRegions, labelAlternatives, labels } from '@/db/schema';
+import { keyRegions, labelAlternatives, labels, readings } from '@/db/schema';
 import { DEFAULT_CONVENTIONS } from '@/lib/theory/conventions';
 import { formatNumeral } from '@/lib/theory/numeral-format';
 import type { Key } from '@/lib/theory/key';
 import type { Numeral } from '@/lib/theory/numeral';
 import { fifths } from '@/lib/theory/pitch';
-import type { LabelState, Mode } from '@/lib/vocabularies';
+import type { LabelState, Mode, ReadingKind, ReadingState } from '@/lib/vocabularies';
 
 /**
  * A reading's content as it lies in rows: what lib/harmony's Reading is, with plain numbers for ticks. A Reading can be
@@ -164,4 +164,22 @@ export async function unsafeLoadReadingContent(
     regions: regionRows.map((row) => ({ start: row.startTick, end: row.endTick, key: keyOf(row.tonicFifths, row.mode) })),
     labels: labelRows.map((row) => storedLabel(row, alternatives.get(row.id) ?? [])),
   };
+}
+
+export interface NewReading {
+  readonly id: string;
+  readonly excerptId: string;
+  readonly departmentId: string;
+  /** Null for the engine's own. */
+  readonly ownerId: string | null;
+  readonly kind: ReadingKind;
+  readonly title: string;
+  readonly state: ReadingState;
+  readonly startTick: number;
+  readonly endTick: number;
+  readonly basedOn?: string | null;
+}
+
+export async function insertReading(db: Db, reading: NewReading): Promise<void> {
+  await db.insert(readings).values(reading);
 }
