@@ -1,6 +1,6 @@
 import { and, asc, desc, eq, inArray, isNull, or, sql } from 'drizzle-orm';
 import type { Db } from '@/db/client';
-import { assignments, courseMembers, courses, excerpts, questions, readings, scores, users } from '@/db/schema';
+import { assignments, courseMembers, courses, excerpts, questions, readings, scores, submissions, users } from '@/db/schema';
 import type { Actor } from '@/lib/auth/actor';
 import type { Framed } from '@/lib/marking/key-reading';
 import type { Rubric } from '@/lib/marking/rubric';
@@ -223,4 +223,16 @@ export async function listKeySources(db: Db, actor: Actor): Promise<KeySource[]>
       ),
     )
     .orderBy(asc(scores.composer), asc(scores.title), asc(excerpts.title), desc(readings.updatedAt));
+}
+
+/** Someone has begun it. */
+export async function hasSubmissions(db: Db, assignmentId: string): Promise<boolean> {
+  const [row] = await db.select({ id: submissions.id }).from(submissions).where(eq(submissions.assignmentId, assignmentId)).limit(1);
+  return row !== undefined;
+}
+
+/** Sharps (positive) or flats of the score's first key signature; 0 when it has none. */
+export async function unsafeGetKeySignature(db: Db, scoreId: string): Promise<number> {
+  const [row] = await db.select({ keyFifths: scores.keyFifths }).from(scores).where(eq(scores.id, scoreId));
+  return row?.keyFifths ?? 0;
 }
