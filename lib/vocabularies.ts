@@ -2,6 +2,7 @@
  * The closed vocabularies that TypeScript, zod and SQL share: one constant each. A word is added at the end of its list
  * and comes with a migration; none is renamed once rows hold it.
  */
+export { PAPERS, type Paper } from '@/lib/handout/order';
 export { LABEL_STATES, type LabelState } from '@/lib/harmony/reading';
 export { SEGMENTATIONS, type Segmentation } from '@/lib/marking/rubric';
 export { VERDICTS, type Verdict } from '@/lib/marking/verdict';

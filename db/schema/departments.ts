@@ -1,11 +1,11 @@
 import { index, int, mysqlEnum, mysqlTable, primaryKey, uniqueIndex, varchar } from 'drizzle-orm/mysql-core';
-import { ROLES } from '@/lib/vocabularies';
+import { type Paper, ROLES } from '@/lib/vocabularies';
 import { binaryText, createdAt, id, json, shortText, updatedAt, utcDateTime } from '../columns';
 
 export interface DepartmentSettings {
   /** BCP 47; what the handouts' paper and dates follow. */
   readonly locale?: string;
-  readonly paper?: 'a4' | 'letter';
+  readonly paper?: Paper;
 }
 
 /** The tenant: its members, its library, its courses. */

@@ -1,0 +1,25 @@
+import type { Metadata } from 'next';
+import { redirect } from 'next/navigation';
+import { getConfig } from '@/lib/config';
+import { safePath } from '@/lib/http/safe-path';
+import { signInErrorMessage } from '@/lib/http/sign-in-error';
+import { getActor } from '@/lib/http/visitor';
+import { SignInForm } from './_components/sign-in-form';
+
+export const metadata: Metadata = { title: 'Sign in' };
+
+interface SignInPageProps {
+  readonly searchParams: Promise<{ readonly from?: string; readonly callbackUrl?: string; readonly error?: string }>;
+}
+
+export default async function SignInPage({ searchParams }: SignInPageProps) {
+  const { from, error } = await searchParams;
+  const next = safePath(from);
+  if (await getActor()) redirect(next);
+  return (
+    <>
+      <h1 className="mb-5 text-title">Sign in</h1>
+      <SignInForm next={next} providerName={getConfig().oidc?.name ?? null} startError={error ? signInErrorMessage(error) : null} />
+    </>
+  );
+}
