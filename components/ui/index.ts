@@ -16,18 +16,21 @@
  *  Spinner, Skeleton, SkeletonRows, Progress
  *  EmptyState, ErrorNote, WarningNote, SettledNote
  *  StateMark (STATES), Mark, ShapeIcon    state as shape + word + colour
+ *  DateText (UTC), Pagination
  *  Tag, Breadcrumbs, PageHeader, Section, Facts, ThemeSwitch, Wordmark
  */
 export { Breadcrumbs, type Crumb } from './breadcrumbs';
 export { BUTTON_KINDS, Button, type ButtonKind, ButtonLink, buttonClass } from './button';
 export { Checkbox, Choices, Radio } from './checkbox';
 export { classNames } from './class-names';
+export { DateText } from './date-text';
 export { Confirm, Dialog, DialogActions } from './dialog';
 export { Field, useFieldIds } from './field';
 export { Input, Select, TextArea } from './input';
 export { Menu, MenuAction, MenuChoice, MenuHeading, MenuLink, MenuRule } from './menu';
 export { EmptyState, ErrorNote, SettledNote, WarningNote } from './notes';
 export { Facts, PageHeader, Section } from './page-header';
+export { Pagination } from './pagination';
 export { Progress } from './progress';
 export { SHAPES, type Shape, ShapeIcon } from './shape';
 export { Skeleton, SkeletonRows } from './skeleton';

@@ -1,8 +1,9 @@
 'use client';
 
-import { type ReactNode, createContext, useCallback, useContext, useMemo, useRef, useState } from 'react';
+import { type ReactNode, createContext, useCallback, useContext, useEffect, useMemo, useRef, useState } from 'react';
 import { classNames } from './class-names';
 import { ShapeIcon } from './shape';
+import { allowOwnStyles } from './style-nonce';
 
 interface Toast {
   readonly id: number;
@@ -33,6 +34,7 @@ export function useAnnouncer(): Announcer {
 export function Announcements({ children }: { readonly children: ReactNode }) {
   const [toasts, setToasts] = useState<readonly Toast[]>([]);
   const lastId = useRef(0);
+  useEffect(allowOwnStyles, []);
   const dismiss = useCallback((id: number) => setToasts((all) => all.filter((toast) => toast.id !== id)), []);
   const add = useCallback(
     (text: string, tone: Toast['tone'], action: Toast['action']) => {
