@@ -63,7 +63,8 @@ async function startNodePart(script, args, ports, logFile) {
   throw new SetupError(`${script} did not start; see ${logFile}`);
 }
 
-function partsOf(dataDir, ports, secrets, logDir) {
+function partsOf({ dataDir, ports, secrets, logDir, throwaway }) {
+  const { database: password } = secrets;
   const log = (name) => path.join(logDir, `${name}.log`);
   const objects = [String(ports.objects), path.join(dataDir, 'objects'), BUCKET];
   const mail = [String(ports.smtp), String(ports.mails), path.join(dataDir, 'mail')];
@@ -71,7 +72,7 @@ function partsOf(dataDir, ports, secrets, logDir) {
     {
       name: 'database',
       title: `MariaDB on port ${ports.database}`,
-      start: () => startMariadb({ dataDir, port: ports.database, password: secrets.database, logFile: log('mariadb') }),
+      start: () => startMariadb({ dataDir, port: ports.database, password, logFile: log('mariadb'), throwaway }),
     },
     {
       name: 'object store',
@@ -88,9 +89,9 @@ function partsOf(dataDir, ports, secrets, logDir) {
 
 /**
  * Starts the parts, each with its line. Resolves with the environment for the app, the lock of the data folder, and
- * `stop()`, which ends them in the opposite order.
+ * `stop()`, which ends them in the opposite order. `throwaway` data does not outlive a crash.
  */
-export async function startFakes(dataDir) {
+export async function startFakes(dataDir, { throwaway = false } = {}) {
   const logDir = path.join(dataDir, 'logs');
   mkdirSync(logDir, { recursive: true });
   const lock = takeLock(dataDir);
@@ -103,7 +104,7 @@ export async function startFakes(dataDir) {
   try {
     const ports = await choosePorts(dataDir, ['database', 'objects', 'smtp', 'mails']);
     const secrets = getSecrets(dataDir);
-    for (const { name, title, start } of partsOf(dataDir, ports, secrets, logDir)) {
+    for (const { name, title, start } of partsOf({ dataDir, ports, secrets, logDir, throwaway })) {
       await step(title, async () => void running.push(await supervise(name, start)));
     }
     const env = environmentOf(ports, secrets);
