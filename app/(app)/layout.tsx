@@ -1,6 +1,5 @@
 import { cookies } from 'next/headers';
 import type { ReactNode } from 'react';
-import { THEMES } from '@/components/ui';
 import { getDepartment } from '@/db/queries/members';
 import { requireActor } from '@/lib/http/visitor';
 import { createDeps } from '@/lib/workflows/deps';
@@ -11,7 +10,7 @@ export default async function SignedInLayout({ children }: { readonly children: 
   const actor = await requireActor();
   const department = await getDepartment(createDeps().db, actor);
   const chosen = (await cookies()).get('theme')?.value;
-  const theme = THEMES.find((name) => name === chosen) ?? 'system';
+  const theme = chosen === 'day' || chosen === 'night' ? chosen : 'system';
   return (
     <Shell departmentName={department.name} person={{ name: actor.name, role: actor.role }} theme={theme}>
       {children}
