@@ -1,3 +1,5 @@
+import type { Numeral } from './numeral';
+
 /**
  * A course's spelling of labels. It decides how a numeral is printed and how a typed one is read; it never changes
  * what a numeral is. Every choice has a name that says what is seen on paper.
@@ -60,3 +62,10 @@ export const CONVENTION_PRESETS = {
   'capitals-I64-of-N6': { ...DEFAULT_CONVENTIONS, case: 'all-capitals', cadential: 'tonic', applied: 'of' },
 } as const satisfies Readonly<Record<string, ConventionSheet>>;
 export type ConventionPreset = keyof typeof CONVENTION_PRESETS;
+
+/** The plain chord that the sheet prints exactly like the cadential six-four. */
+export function looksCadential({ degree, quality, inversion, added }: Numeral, sheet: ConventionSheet): boolean {
+  if (inversion !== 2 || degree.alter !== 0 || added.length > 0) return false;
+  if (sheet.cadential === 'dominant') return degree.step === 5 && quality === 'major';
+  return sheet.cadential === 'tonic' && degree.step === 1 && (quality === 'major' || quality === 'minor');
+}

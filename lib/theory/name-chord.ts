@@ -1,8 +1,7 @@
 import { checkAppliedQuality, keyOfNumeral, keyOfTarget } from './applied';
 import { QUALITIES, type Quality, TEMPLATES, isAugmentedSixth, triadOf } from './chord';
 import { type Key, type Mode, type Step, degreeOfFifths } from './key';
-import type { Numeral, Target } from './numeral';
-import { isNeapolitan } from './numeral-parse';
+import { type Numeral, type Target, degreeOfAugmentedSixth, isNeapolitan } from './numeral';
 import type { Fifths } from './pitch';
 import { isDominant, isLeadingToneChord, isPredominant } from './resolutions';
 import { spellNumeral } from './spell';
@@ -98,8 +97,8 @@ function specialsOf(plain: Numeral, mode: Mode): Numeral[] {
 }
 
 function isOnItsDegree({ degree, quality }: Numeral): boolean {
-  const [step, alter] = quality === 'augmented-sixth-french' ? [2, 0] : quality === 'augmented-sixth-swiss' ? [2, 1] : [4, 1];
-  return degree.step === step && degree.alter === alter;
+  const usual = degreeOfAugmentedSixth(quality);
+  return degree.step === usual.step && degree.alter === usual.alter;
 }
 
 /** Chords that tonicise: dominants and leading-tone chords of the right quality; then what prepares those in the target's key. */

@@ -1,9 +1,8 @@
 import { type Quality, type Triad, figuresOf, isAugmentedSixth, seventhOf, sizeOf, triadOf } from './chord';
-import { type ConventionSheet, DEFAULT_CONVENTIONS } from './conventions';
+import { type ConventionSheet, DEFAULT_CONVENTIONS, looksCadential } from './conventions';
 import { type Signs, isDiatonicHalfDiminished, plainNinth, plainSeventh, plainTriad, signsOf } from './diatonic';
 import type { Degree, Mode } from './key';
-import type { Numeral, Special, Target } from './numeral';
-import { isNeapolitan, looksCadential } from './numeral-parse';
+import { type Numeral, type Special, type Target, isNeapolitan } from './numeral';
 
 /**
  * A numeral taken apart for print, before any typesetting: `♭`, `VI`, `+`, `maj`, 6 5, `add6`. Text and typesetting both
@@ -97,14 +96,18 @@ function markOf({ degree, quality }: Numeral, triad: Triad, mode: Mode, sheet: C
 
 /** Capitals leave out M and m where the bare numeral is read as this very triad. */
 function capitalMark(degree: Degree, triad: 'major' | 'minor', mode: Mode, sheet: ConventionSheet): NumeralPieces['mark'] {
-  const sameSigns = signsOf(mode, degree, triad, sheet.accidentals) === signsOf(mode, degree, 'major', sheet.accidentals);
-  if (sameSigns && plainTriad(mode, degree) === triad) return '';
+  if (isBareCapital(degree, triad, mode, sheet)) return '';
   return triad === 'major' ? 'M' : 'm';
+}
+
+function isBareCapital(degree: Degree, triad: Triad, mode: Mode, { accidentals }: ConventionSheet): boolean {
+  const sameSigns = signsOf(mode, degree, triad, accidentals) === signsOf(mode, degree, 'major', accidentals);
+  return sameSigns && plainTriad(mode, degree) === triad;
 }
 
 function isPlainHalfDiminished(degree: Degree, mode: Mode, sheet: ConventionSheet): boolean {
   if (sheet.halfDiminished !== 'plain' || !isDiatonicHalfDiminished(mode, degree)) return false;
-  return sheet.case === 'by-quality' || plainTriad(mode, degree) === 'diminished';
+  return sheet.case === 'by-quality' || isBareCapital(degree, 'diminished', mode, sheet);
 }
 
 /** '' when an unmarked figure already means this seventh. */

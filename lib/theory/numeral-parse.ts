@@ -1,9 +1,9 @@
 import { type Result, ok } from '../result';
 import { FIGURE_FORMS, type Quality, type SeventhSize, type Triad, sizeOf } from './chord';
-import { type ConventionSheet, DEFAULT_CONVENTIONS } from './conventions';
+import { type ConventionSheet, DEFAULT_CONVENTIONS, looksCadential } from './conventions';
 import { degreeOfSigns, getSeventhChord, isDiatonicHalfDiminished, plainNinth, plainSeventh, plainTriad } from './diatonic';
 import type { Degree, Mode } from './key';
-import { ADDED_TONES, type AddedTone, type Numeral, type Special, type Target } from './numeral';
+import { ADDED_TONES, type AddedTone, type Numeral, type Special, type Target, findAddedConflict, isNeapolitan } from './numeral';
 import {
   type NamedHead,
   type Note,
@@ -66,18 +66,19 @@ function readTargets({ targets }: ScannedNumeral, frame: Frame): Read<Target[]> 
 
 function readTarget(head: TargetHead, frame: Frame): Read<Target> {
   if ('neapolitan' in head) return ok({ degree: { step: 2, alter: -1 }, mode: 'major' });
+  const wrong = head.mark && checkMark(head.mark, head, frame.sheet.case === 'by-quality');
+  if (wrong) return stopAt(frame.text, head.at, wrong);
   const triad = targetTriad(head, frame);
   if (triad === 'diminished') return stopAt(frame.text, head.at, 'a diminished triad cannot be tonicised; a target is a major or minor triad.');
   const degree = readDegree(head, triad, frame);
   return degree.ok ? ok({ degree: degree.value, mode: triad }) : degree;
 }
 
-function targetTriad(head: Roman, { mode, sheet }: Frame): 'major' | 'minor' | 'diminished' {
+function targetTriad(head: Roman & { readonly mark: string | null }, frame: Frame): 'major' | 'minor' | 'diminished' {
   if (!head.capital) return 'minor';
-  if (sheet.case === 'by-quality') return 'major';
-  const degree = degreeOfSigns(mode, head.step, head.signs, 'major', sheet.accidentals);
-  const plain = degree ? plainTriad(mode, degree) : 'major';
-  return plain === 'augmented' ? 'major' : plain;
+  if (frame.sheet.case === 'by-quality') return 'major';
+  const triad = capitalTriad(head, head.mark, frame);
+  return triad === 'augmented' ? 'major' : triad;
 }
 
 function readDegree(roman: Roman, triad: Triad, { text, mode, sheet }: Frame): Read<Degree> {
@@ -114,13 +115,14 @@ function readTriad({ roman, mark }: RomanHead, frame: Frame): Read<Triad> {
   if (mark?.value === 'diminished' || mark?.value === 'half-diminished') return ok('diminished');
   if (mark?.value === 'augmented') return ok('augmented');
   if (!roman.capital) return ok('minor');
-  return ok(byQuality ? 'major' : capitalTriad(roman, mark?.value === 'capital-minor', mark?.value === 'capital-major', frame));
+  return ok(byQuality ? 'major' : capitalTriad(roman, mark?.value ?? null, frame));
 }
 
-function capitalTriad(roman: Roman, minor: boolean, major: boolean, { mode, sheet }: Frame): Triad {
-  if (minor) return 'minor';
+/** Under capitals throughout: the key's own triad unless M or m says otherwise. */
+function capitalTriad(roman: Roman, mark: string | null, { mode, sheet }: Frame): Triad {
+  if (mark === 'capital-minor') return 'minor';
   const degree = degreeOfSigns(mode, roman.step, roman.signs, 'major', sheet.accidentals);
-  return major || !degree ? 'major' : plainTriad(mode, degree);
+  return mark === 'capital-major' || !degree ? 'major' : plainTriad(mode, degree);
 }
 
 /** What is wrong with a mark on this numeral; null when nothing is. */
@@ -243,9 +245,11 @@ function readNotes(notes: readonly Token<Note>[], plain: Numeral, frame: Frame):
   if (wrong) return wrong;
   const tones = notes.flatMap(({ value }) => (value.kind === 'added' ? [value.tone] : []));
   const added = ADDED_TONES.filter((tone) => tones.includes(tone) || plain.added.includes(tone));
+  const conflict = findAddedConflict({ ...plain, added });
+  if (conflict) return stopAt(frame.text, notes.findLast(({ value }) => value.kind === 'added')?.at ?? frame.text.length, conflict);
   const word = notes.flatMap(({ value }) => (value.kind === 'six-four' ? [value.word] : []))[0];
   if (word && word !== 'plain') return ok({ ...plain, added, special: SIX_FOUR_SPECIALS[word] });
-  return ok(word ? { ...plain, added } : withImpliedSpecial({ ...plain, added }, notes, frame));
+  return ok(withImpliedSpecial({ ...plain, added }, word === 'plain', notes, frame));
 }
 
 function checkNote({ value, at }: Token<Note>, { quality, inversion }: Numeral, notes: readonly Token<Note>[], text: string): { ok: false; error: NumeralError } | null {
@@ -254,34 +258,16 @@ function checkNote({ value, at }: Token<Note>, { quality, inversion }: Numeral, 
   if (value.kind === 'six-four' && notes.some((n) => n.at !== at && n.value.kind === 'six-four')) return stopAt(text, at, 'a six-four chord is of one kind.');
   if (value.kind === 'ninth' && sizeOf(quality) !== 5) return stopAt(text, at, 'an altered ninth is read over a dominant ninth chord only.');
   if (value.kind === 'mode' && !triadInSixFour) return stopAt(text, at, 'maj and min in brackets belong to the cadential six-four.');
-  if (value.kind !== 'added') return null;
-  if (isSuspension(value.tone) && inversion === 1) return stopAt(text, at, 'the third is in the bass here, so no tone can stand for it.');
-  if (value.tone === 'add9' && sizeOf(quality) === 5) return stopAt(text, at, 'the chord has its ninth already.');
   return null;
 }
 
-function isSuspension(tone: AddedTone): boolean {
-  return tone === 'sus2' || tone === 'sus4';
-}
-
 /** ♭II is the Neapolitan however it is printed; V64 or I64 is cadential where the sheet prints it so. */
-function withImpliedSpecial(numeral: Numeral, notes: readonly Token<Note>[], { sheet, mode }: Frame): Numeral {
+function withImpliedSpecial(numeral: Numeral, saidPlain: boolean, notes: readonly Token<Note>[], { sheet, mode }: Frame): Numeral {
   if (isNeapolitan(numeral)) return { ...numeral, special: 'neapolitan' };
-  if (!looksCadential(numeral, sheet)) return numeral;
+  if (saidPlain || !looksCadential(numeral, sheet)) return numeral;
   const stated = notes.flatMap(({ value }) => (value.kind === 'mode' ? [value.mode] : []))[0];
   const quality = stated ?? (sheet.cadential === 'tonic' ? numeral.quality : mode);
   return { ...numeral, degree: { step: 1, alter: 0 }, quality, special: 'cadential-six-four' };
-}
-
-export function isNeapolitan({ degree, quality }: Pick<Numeral, 'degree' | 'quality'>): boolean {
-  return degree.step === 2 && degree.alter === -1 && (quality === 'major' || quality === 'major-seventh');
-}
-
-/** The plain chord that the sheet prints exactly like the cadential six-four. */
-export function looksCadential({ degree, quality, inversion, added }: Numeral, sheet: ConventionSheet): boolean {
-  if (inversion !== 2 || degree.alter !== 0 || added.length > 0) return false;
-  if (sheet.cadential === 'dominant') return degree.step === 5 && quality === 'major';
-  return sheet.cadential === 'tonic' && degree.step === 1 && (quality === 'major' || quality === 'minor');
 }
 
 function readNamedHead(head: NamedHead, frame: Frame): Read<Numeral> {

@@ -63,7 +63,8 @@ export interface NamedHead extends Tail {
   readonly held: Roman | null;
 }
 
-export type TargetHead = Roman | { readonly at: number; readonly neapolitan: true };
+/** A target; `mark` where capitals throughout need M or m to tell the mode. */
+export type TargetHead = (Roman & { readonly mark: 'capital-major' | 'capital-minor' | null }) | { readonly at: number; readonly neapolitan: true };
 
 export interface ScannedNumeral {
   readonly head: RomanHead | NamedHead;
@@ -284,8 +285,15 @@ function scanTargets(reader: Reader): Result<TargetHead[], NumeralError> {
 function scanTarget(reader: Reader): Result<TargetHead, NumeralError> {
   reader.skipSpace();
   const at = reader.at;
-  if (reader.take(/N(?![a-zA-Z0-9])/)) return ok({ at, neapolitan: true });
-  return scanRoman(reader, 'the numeral of the chord that is tonicised, such as V or ii');
+  if (reader.take(/N/)) return ok({ at, neapolitan: true });
+  const roman = scanRoman(reader, 'the numeral of the chord that is tonicised, such as V or ii');
+  return roman.ok ? ok({ ...roman.value, mark: scanTargetMark(reader) }) : roman;
+}
+
+function scanTargetMark(reader: Reader): 'capital-major' | 'capital-minor' | null {
+  const mark = reader.take(/[Mm]/)?.[0];
+  if (!mark) return null;
+  return mark === 'M' ? 'capital-major' : 'capital-minor';
 }
 
 function expectedAfter(text: string, at: number, inTarget: boolean): string {

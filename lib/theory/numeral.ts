@@ -1,5 +1,5 @@
-import type { Quality } from './chord';
-import type { Degree, Mode } from './key';
+import { type Quality, isAugmentedSixth, sizeOf } from './chord';
+import type { Degree, Mode, Step } from './key';
 
 /** What an applied chord points at: a degree of the key it is read in, tonicised in `mode`. */
 export interface Target {
@@ -42,6 +42,77 @@ export interface Numeral {
   readonly applied: readonly Target[];
   readonly special: Special | null;
   readonly added: readonly AddedTone[];
+}
+
+/** The major triad on the lowered second, or its major seventh chord. */
+export function isNeapolitan({ degree, quality }: Pick<Numeral, 'degree' | 'quality'>): boolean {
+  return isOn(degree, 2, -1) && (quality === 'major' || quality === 'major-seventh');
+}
+
+function isOn(degree: Degree, step: Step, alter: number): boolean {
+  return degree.step === step && degree.alter === alter;
+}
+
+/** The root's degree by which each augmented sixth is written: see Numeral. */
+export function degreeOfAugmentedSixth(quality: Quality): Degree {
+  if (quality === 'augmented-sixth-french') return { step: 2, alter: 0 };
+  return quality === 'augmented-sixth-swiss' ? { step: 2, alter: 1 } : { step: 4, alter: 1 };
+}
+
+/** Why these added tones cannot stand together over this chord; null when they can. */
+export function findAddedConflict({ quality, inversion, added }: Pick<Numeral, 'quality' | 'inversion' | 'added'>): string | null {
+  const has = (tone: AddedTone) => added.includes(tone);
+  if ((has('sus2') || has('sus4')) && inversion === 1) return 'the third is in the bass here, so no tone can stand for it.';
+  if (has('sus4') && has('add4')) return 'the fourth cannot stand for the third and beside it.';
+  if ((has('sus2') || sizeOf(quality) === 5) && has('add9')) return 'the ninth is in the chord already.';
+  return has('sus2') && sizeOf(quality) === 5 ? 'the ninth is in the chord already.' : null;
+}
+
+/**
+ * What is wrong with a numeral as a value, in sentences; [] for every numeral that `parseNumeral` gives. A numeral
+ * without findings can be spelled in every key and comes back from its own text.
+ */
+export function checkNumeral(numeral: Numeral): string[] {
+  const { degree, quality, inversion, applied, added } = numeral;
+  const conflict = findAddedConflict(numeral);
+  const inOrder = ADDED_TONES.filter((tone) => added.includes(tone));
+  return [
+    ...(inversion < sizeOf(quality) ? [] : [`A ${quality} chord has no inversion ${inversion}.`]),
+    ...([degree, ...applied.map((target) => target.degree)].every(({ alter }) => Number.isInteger(alter) && Math.abs(alter) <= 2) ? [] : ['A degree is altered by more than two half steps.']),
+    ...(conflict ? [`Added tones: ${conflict}`] : []),
+    ...(inOrder.length === added.length && inOrder.every((tone, i) => tone === added[i]) ? [] : ['Added tones are out of order or doubled.']),
+    ...specialFindings(numeral),
+  ];
+}
+
+function specialFindings(numeral: Numeral): string[] {
+  const { degree, quality, inversion, applied, special, added } = numeral;
+  const isNameOnly = quality === 'other' || isAugmentedSixth(quality) || special === 'common-tone' || special === 'cadential-six-four';
+  const rightDegree = !isAugmentedSixth(quality) || isOn(degree, degreeOfAugmentedSixth(quality).step, degreeOfAugmentedSixth(quality).alter);
+  return [
+    ...(isNameOnly && added.length > 0 ? ['This chord takes no added tones.'] : []),
+    ...(rightDegree ? [] : [`The ${quality} stands on its own degree only.`]),
+    ...(fitsSpecial(numeral) ? [] : [`${special ?? 'No special'} does not fit a ${quality} chord on degree ${degree.step}, inversion ${inversion}.`]),
+    ...(special === 'pedal-tone' && applied.length > 0 ? ['A pedal takes no target.'] : []),
+  ];
+}
+
+function fitsSpecial({ degree, quality, inversion, special }: Numeral): boolean {
+  const isSixFour = sizeOf(quality) === 3 && inversion === 2 && !isAugmentedSixth(quality);
+  switch (special) {
+    case null:
+      return !isNeapolitan({ degree, quality });
+    case 'neapolitan':
+      return isNeapolitan({ degree, quality });
+    case 'cadential-six-four':
+      return isOn(degree, 1, 0) && isSixFour && (quality === 'major' || quality === 'minor');
+    case 'common-tone':
+      return isOn(degree, 2, 1) && quality === 'diminished-seventh';
+    case 'pedal-tone':
+      return quality === 'other';
+    default:
+      return isSixFour;
+  }
 }
 
 export type { Mode };

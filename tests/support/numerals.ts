@@ -1,0 +1,76 @@
+import fc from 'fast-check';
+
+import { QUALITIES, isAugmentedSixth, sizeOf } from '@/lib/theory/chord';
+import {
+  ACCIDENTAL_FORMS,
+  APPLIED_FORMS,
+  AUGMENTED_SIXTH_FORMS,
+  CADENTIAL_FORMS,
+  CASE_FORMS,
+  type ConventionSheet,
+  FIGURE_STYLES,
+  HALF_DIMINISHED_FORMS,
+  NEAPOLITAN_FORMS,
+} from '@/lib/theory/conventions';
+import { type Degree, type Key, KEYS, MODES, STEPS, parseKey } from '@/lib/theory/key';
+import { ADDED_TONES, type Numeral, SPECIALS, checkNumeral, degreeOfAugmentedSixth } from '@/lib/theory/numeral';
+import { parseNumeral } from '@/lib/theory/numeral-parse';
+import { type Fifths, formatPitchClass, parsePitchClass } from '@/lib/theory/pitch';
+import { spellNumeral } from '@/lib/theory/spell';
+import { unwrap } from '@/lib/result';
+
+/** The key of a text such as `Eb major` or `c#`. */
+export function key(text: string): Key {
+  return unwrap(parseKey(text));
+}
+
+/** The numeral of a text, read in the key. */
+export function numeral(keyText: string, text: string): Numeral {
+  return unwrap(parseNumeral(text, key(keyText).mode));
+}
+
+/** Spelled tones from the bass up: `notes('c', 'vii°7')` is `B D F Ab`. */
+export function notes(keyText: string, text: string): string {
+  return spellNumeral(key(keyText), numeral(keyText, text)).tones.map((tone) => formatPitchClass(tone.fifths)).join(' ');
+}
+
+/** Pitch classes of `B D F Ab`, or without spaces `BDFA♭`, in the order written. */
+export function tones(text: string): Fifths[] {
+  return (text.match(/[A-G](?:#+|b+|♯+|♭+|𝄪|𝄫)?/gu) ?? []).map((name) => unwrap(parsePitchClass(name)));
+}
+
+export const anyKey: fc.Arbitrary<Key> = fc.constantFrom(...KEYS);
+export const anyMode = fc.constantFrom(...MODES);
+
+export const anySheet: fc.Arbitrary<ConventionSheet> = fc.record({
+  cadential: fc.constantFrom(...CADENTIAL_FORMS),
+  applied: fc.constantFrom(...APPLIED_FORMS),
+  neapolitan: fc.constantFrom(...NEAPOLITAN_FORMS),
+  figures: fc.constantFrom(...FIGURE_STYLES),
+  case: fc.constantFrom(...CASE_FORMS),
+  accidentals: fc.constantFrom(...ACCIDENTAL_FORMS),
+  halfDiminished: fc.constantFrom(...HALF_DIMINISHED_FORMS),
+  augmentedSixths: fc.constantFrom(...AUGMENTED_SIXTH_FORMS),
+});
+
+const anyDegree: fc.Arbitrary<Degree> = fc.record({ step: fc.constantFrom(...STEPS), alter: fc.integer({ min: -2, max: 2 }) });
+
+const anyTarget = fc.record({ degree: anyDegree, mode: anyMode });
+
+/** Any value of the type; most of them are no chord. */
+const anyShape: fc.Arbitrary<Numeral> = fc
+  .record({
+    degree: anyDegree,
+    quality: fc.constantFrom(...QUALITIES),
+    inversion: fc.constantFrom(0, 1, 2, 3, 4),
+    applied: fc.array(anyTarget, { maxLength: 3 }),
+    special: fc.option(fc.constantFrom(...SPECIALS), { nil: null, freq: 2 }),
+    added: fc.subarray([...ADDED_TONES], { maxLength: 2 }),
+  })
+  .map((shape) => ({ ...shape, inversion: (shape.inversion % sizeOf(shape.quality)) as Numeral['inversion'] }))
+  .map((shape) => (isAugmentedSixth(shape.quality) ? { ...shape, degree: degreeOfAugmentedSixth(shape.quality) } : shape))
+  .map((shape) => (shape.special === 'cadential-six-four' ? { ...shape, degree: { step: 1, alter: 0 } as const, inversion: 2 as const } : shape))
+  .map((shape) => (shape.special === 'common-tone' ? { ...shape, degree: { step: 2, alter: 1 } as const, quality: 'diminished-seventh' as const } : shape));
+
+/** Every numeral that the check lets pass. */
+export const anyNumeral: fc.Arbitrary<Numeral> = anyShape.filter((shape) => checkNumeral(shape).length === 0);
