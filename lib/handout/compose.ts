@@ -2,7 +2,7 @@ import { engrave } from './engrave';
 import type { EngravedSystem } from './engraving-svg';
 import { createRuler, type Ruler } from './fonts';
 import { escapeXml, line, lineEndingAt, rule, wrap } from './ink';
-import { drawLane, laneEntries, type LaneEntry, LANE_DEPTH, marksOf } from './lanes';
+import { drawLane, laneEntries, type LaneEntry, LANE_DROP, laneDepth, marksOf } from './lanes';
 import { type HandoutOrder, PAPER_SIZES, STAFF_SCALES } from './order';
 
 /** Pages ready to show or to print. Each is a whole SVG in hundredths of a millimetre, its fonts named by lib/handout/fonts. */
@@ -39,7 +39,7 @@ export async function composeHandout(order: HandoutOrder): Promise<HandoutDocume
   const { width, height } = PAPER_SIZES[order.paper];
   const ruler = createRuler();
   const sheet: Sheet = { order, ruler, left: MARGIN.left, right: width - MARGIN.right, bottom: height - MARGIN.bottom };
-  const entries = laneEntries(order, ruler);
+  const entries = laneEntries(order);
   const scale = STAFF_SCALES[order.staffSize];
   const engraving = await engrave({
     xml: order.xml,
@@ -71,10 +71,10 @@ function paginate(blocks: readonly Block[], bottom: number): string[] {
 function systemBlock(sheet: Sheet, entries: readonly LaneEntry[], system: EngravedSystem, scale: number): Block {
   const marks = [...system.marks.values()];
   const lane = Math.max(...marks.map((mark) => mark.y), system.bottom) - system.top;
-  const height = lane * scale + (marks.length > 0 ? LANE_DEPTH : 0) + SYSTEM_GAP;
+  const height = lane * scale + laneDepth(entries, system) + SYSTEM_GAP;
   const draw = (y: number): string => {
     const music = `<g transform="translate(${sheet.left} ${Math.round(y - system.top * scale)}) scale(${scale})">${system.svg}</g>`;
-    const baseline = y + ((marks[0]?.y ?? 0) - system.top) * scale;
+    const baseline = y + ((marks[0]?.y ?? 0) - system.top) * scale + LANE_DROP;
     const frame = { ruler: sheet.ruler, scale, keysGiven: givesKeys(sheet.order), y: baseline, right: sheet.right };
     return music + drawLane(entries, system, sheet.left, frame);
   };

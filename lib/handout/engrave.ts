@@ -1,4 +1,5 @@
-import type { VerovioToolkit } from 'verovio/esm';
+import { createRequire } from 'node:module';
+import path from 'node:path';
 import { type EngravedSystem, readEngraving } from './engraving-svg';
 import { insertMarks, type EngravingMark } from './engraving-marks';
 
@@ -46,6 +47,21 @@ const OPTIONS = {
   spacingStaff: 10,
 } as const;
 
+/** The part of the engraver's interface that is used here; the package has no types. */
+interface VerovioToolkit {
+  setOptions(options: Readonly<Record<string, unknown>>): void;
+  loadData(text: string): boolean;
+  getMEI(): string;
+  select(selection: { measureRange: string }): boolean;
+  redoLayout(): void;
+  renderToSVG(page: number): string;
+}
+
+interface VerovioPackage {
+  readonly module: { onRuntimeInitialized: () => void };
+  readonly toolkit: new () => VerovioToolkit;
+}
+
 let toolkit: Promise<VerovioToolkit> | null = null;
 
 /** The engraver is a WebAssembly module that takes about a second to start: one per process. */
@@ -54,12 +70,15 @@ function getToolkit(): Promise<VerovioToolkit> {
   return toolkit;
 }
 
-async function startToolkit(): Promise<VerovioToolkit> {
-  const [{ default: createVerovioModule }, { VerovioToolkit: Toolkit }] = await Promise.all([
-    import('verovio/wasm'),
-    import('verovio/esm'),
-  ]);
-  return new Toolkit(await createVerovioModule());
+/**
+ * The package's CommonJS build, asked for by `require`: run from the sources, the other build would first be parsed as
+ * a module of ours, all ten megabytes of it.
+ */
+function startToolkit(): Promise<VerovioToolkit> {
+  const verovio = createRequire(path.join(process.cwd(), 'package.json'))('verovio') as VerovioPackage;
+  return new Promise((resolve) => {
+    verovio.module.onRuntimeInitialized = () => resolve(new verovio.toolkit());
+  });
 }
 
 /** Draws a bar range as systems of SVG with the places of its marks. Throws when the engraver cannot load the text. */

@@ -3,10 +3,10 @@ import path from 'node:path';
 import PDFDocument from 'pdfkit';
 
 /**
- * The faces of a handout; `signs` holds the accidentals, which the text faces lack, and `figures` is the book face with
- * lining figures (6 and 4 of one height), as figured bass wants them.
+ * The faces of a handout. `numeral` is the face of numerals' letters and `figures` the same with its own small figures;
+ * `signs` holds the accidentals, which the text faces lack; `engraver` the musical signs within an engraver's texts.
  */
-export const FACES = ['book', 'book-italic', 'book-bold', 'sans', 'sans-bold', 'figures', 'signs'] as const;
+export const FACES = ['book', 'book-italic', 'book-bold', 'sans', 'sans-bold', 'numeral', 'figures', 'signs', 'engraver'] as const;
 export type Face = (typeof FACES)[number];
 
 /** The text faces come in one file per script; a run of text is set from the file that has its letters. */
@@ -16,13 +16,17 @@ type Script = (typeof SCRIPTS)[number];
 /** A face in one script, as it is registered with the PDF writer: `book`, `book.greek`, `signs`. */
 export type FontName = string & { readonly unit: 'font' };
 
-const WEIGHTS: Readonly<Record<Exclude<Face, 'signs'>, { readonly family: string; readonly style: string }>> = {
+/** Faces that come in one file for all scripts. */
+type SingleFace = 'signs' | 'engraver';
+
+const WEIGHTS: Readonly<Record<Exclude<Face, SingleFace>, { readonly family: string; readonly style: string }>> = {
   book: { family: 'alegreya', style: '400-normal' },
   'book-italic': { family: 'alegreya', style: '400-italic' },
   'book-bold': { family: 'alegreya', style: '700-normal' },
   sans: { family: 'alegreya-sans', style: '400-normal' },
   'sans-bold': { family: 'alegreya-sans', style: '700-normal' },
-  figures: { family: 'alegreya', style: '400-normal' },
+  numeral: { family: 'alegreya', style: '500-normal' },
+  figures: { family: 'alegreya', style: '500-normal' },
 };
 
 const from = createRequire(path.join(process.cwd(), 'package.json'));
@@ -33,13 +37,18 @@ function pathInPackage(name: string, file: string): string {
 
 /** PDF fonts are .woff and .otf files: the PDF writer cannot finish a document with .woff2 fonts. */
 function pathOfFont(face: Face, script: Script): string {
-  if (face === 'signs') return pathInPackage('@vexflow-fonts/bravuratext', 'bravuratext.otf');
+  if (face === 'signs') return path.join(process.cwd(), 'app/fonts/understave-signs.otf');
+  if (face === 'engraver') return pathInPackage('@vexflow-fonts/bravuratext', 'bravuratext.otf');
   const { family, style } = WEIGHTS[face];
   return pathInPackage(`@fontsource/${family}`, `files/${family}-${script}-${style}.woff`);
 }
 
+function isSingle(face: Face): face is SingleFace {
+  return face === 'signs' || face === 'engraver';
+}
+
 function fontName(face: Face, script: Script): FontName {
-  return (face === 'signs' || script === 'latin' ? face : `${face}.${script}`) as FontName;
+  return (isSingle(face) || script === 'latin' ? face : `${face}.${script}`) as FontName;
 }
 
 /** What the PDF writer keeps of an open font; its declarations leave it out. */
@@ -51,17 +60,18 @@ interface OpenFont {
 /** Registers every face with a PDF document. Fonts that are not used leave nothing in the file. */
 export function registerFaces(doc: PDFKit.PDFDocument): void {
   for (const face of FACES) {
-    for (const script of face === 'signs' ? (['latin'] as const) : SCRIPTS) doc.registerFont(fontName(face, script), pathOfFont(face, script));
+    for (const script of isSingle(face) ? (['latin'] as const) : SCRIPTS) doc.registerFont(fontName(face, script), pathOfFont(face, script));
   }
-  setLiningFigures(doc);
+  setFeature(doc, 'numeral', 'lnum');
+  setFeature(doc, 'figures', 'dnom');
 }
 
-/** The SVG-to-PDF writer passes no OpenType features on: the face itself asks for lining figures. */
-function setLiningFigures(doc: PDFKit.PDFDocument): void {
-  const font = (doc.font('figures') as unknown as { readonly _font: OpenFont })._font;
+/** The SVG-to-PDF writer passes no OpenType features on: the face itself asks for lining or small figures. */
+function setFeature(doc: PDFKit.PDFDocument, face: Face, feature: 'lnum' | 'dnom'): void {
+  const font = (doc.font(face) as unknown as { readonly _font: OpenFont })._font;
   const [encode, widthOfString] = [font.encode.bind(font), font.widthOfString.bind(font)];
-  font.encode = (text) => encode(text, ['lnum']);
-  font.widthOfString = (text, size) => widthOfString(text, size, ['lnum']);
+  font.encode = (text) => encode(text, [feature]);
+  font.widthOfString = (text, size) => widthOfString(text, size, [feature]);
 }
 
 /** A stretch of text that one font has the letters of. */

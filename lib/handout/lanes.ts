@@ -23,17 +23,25 @@ const BLANK_WIDTH = 1250;
 const GAP = 160;
 const KEY_SIZE = 340;
 const KEY_DROP = 560;
-/** From the lane's baseline to the bottom of everything under the score. */
-export const LANE_DEPTH = 700;
+/** The engraver makes room for its own text, which is lower than a numeral with raised figures: the lane lies this much deeper. */
+export const LANE_DROP = 170;
+const NUMERAL_DEPTH = 180;
+
+/** From the lane's baseline to the bottom of what stands under this system. */
+export function laneDepth(entries: readonly LaneEntry[], system: EngravedSystem): number {
+  const here = entries.filter((entry) => system.marks.has(entry.id));
+  if (here.length === 0) return 0;
+  return LANE_DROP + (here.some((entry) => entry.region) ? KEY_DROP + NUMERAL_DEPTH : NUMERAL_DEPTH);
+}
 
 /** What stands under the score, in order. Labels without a numeral that are not asked for leave no trace. */
-export function laneEntries(order: HandoutOrder, ruler: Ruler): LaneEntry[] {
+export function laneEntries(order: HandoutOrder): LaneEntry[] {
   let number = 0;
   return order.reading.labels.flatMap((label, index) => {
     const blank = order.kind === 'worksheet' && order.asked.has(label.id);
     const region = regionAt(order, label, index === 0);
     const before = order.reading.labels[index - 1]?.numeral ?? null;
-    const ink = blank || !label.numeral ? null : setNumeral(label.numeral, before, label.key.mode, order.conventions, ruler);
+    const ink = blank || !label.numeral ? null : setNumeral(label.numeral, before, label.key.mode, order.conventions);
     if (!blank && !ink && !region) return [];
     if (blank) number += 1;
     return [{ id: `L${index}`, label, ink, number: blank ? number : null, region }];

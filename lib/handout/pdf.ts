@@ -40,7 +40,7 @@ function collect(doc: PDFKit.PDFDocument): Promise<Uint8Array> {
 function fontCallback(family: string, bold: boolean, italic: boolean): string {
   const name = family.split(',')[0]?.replace(/["']/g, '').trim() ?? '';
   if (isFont(name) && name !== 'book') return name;
-  if (/leipzig|verovio|bravura/i.test(name)) return 'signs';
+  if (/leipzig|verovio|bravura/i.test(name)) return 'engraver';
   return bold ? 'book-bold' : italic ? 'book-italic' : 'book';
 }
 
