@@ -1,7 +1,7 @@
 'use client';
 
 import { useState } from 'react';
-import { EmptyState, Field, Input, Row, Select, Table, Td, Th } from '@/components/ui';
+import { Button, EmptyState, Field, Input, Row, Select, Table, Td, Th } from '@/components/ui';
 import { ROLES, type Role } from '@/lib/vocabularies';
 import { changeRole } from '../actions';
 import { MemberMenu } from './member-menu';
@@ -62,26 +62,42 @@ function Members({ members, ownId }: MemberTableProps) {
 }
 
 function MemberLine({ member, own }: { readonly member: MemberRow; readonly own: boolean }) {
-  const { userId, name, email, role, since } = member;
-  const [busy, act] = useAct();
-  const change = (next: Role) => act(() => changeRole({ userId, role: next }), `${name} is now ${next}.`);
+  const { name, email, since } = member;
   return (
     <Row>
       <Th scope="row">{name}{own ? <span className="text-ink-soft"> (you)</span> : null}</Th>
       <Td>{email}</Td>
-      <Td>
-        <Select
-          aria-label={`Role of ${name}`}
-          className="w-36"
-          value={role}
-          disabled={busy}
-          onChange={(event) => void change(ROLES.find((choice) => choice === event.target.value) ?? role)}
-        >
-          {ROLES.map((choice) => <option key={choice}>{choice}</option>)}
-        </Select>
-      </Td>
+      <Td><RoleChoice member={member} /></Td>
       <Td className="whitespace-nowrap">{since}</Td>
       <Td className="text-right"><MemberMenu member={member} own={own} /></Td>
     </Row>
+  );
+}
+
+/** Choosing alone changes nothing: an arrow key in a closed list is pressed too easily for what it would do. */
+function RoleChoice({ member }: { readonly member: MemberRow }) {
+  const { userId, name, role } = member;
+  const [chosen, setChosen] = useState(role);
+  const [busy, act] = useAct();
+  const save = async () => {
+    if (!(await act(() => changeRole({ userId, role: chosen }), `${name} is now ${chosen}.`))) setChosen(role);
+  };
+  return (
+    <span className="flex items-center gap-2">
+      <Select
+        aria-label={`Role of ${name}`}
+        className="w-36"
+        value={chosen}
+        disabled={busy}
+        onChange={(event) => setChosen(ROLES.find((choice) => choice === event.target.value) ?? role)}
+      >
+        {ROLES.map((choice) => <option key={choice}>{choice}</option>)}
+      </Select>
+      {chosen === role ? null : (
+        <Button size="small" kind="primary" busy={busy} onClick={() => void save()}>
+          Change<span className="sr-only"> the role of {name}</span>
+        </Button>
+      )}
+    </span>
   );
 }
