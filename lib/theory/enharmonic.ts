@@ -1,6 +1,6 @@
 import { type Key, isWrittenKey, signatureOf } from './key';
 import type { Numeral } from './numeral';
-import { type Fifths, fifths, pitchClassOf } from './pitch';
+import { type Fifths, alterOf, fifths, pitchClassOf } from './pitch';
 import { type SpelledChord, spellNumeral } from './spell';
 
 /** The same sound read in another key: the key, the numeral, and how the tones are then spelled, from the bass up. */
@@ -34,16 +34,16 @@ function diminishedReadings({ tones, bass, root }: SpelledChord): EnharmonicRead
   return [0, 3, 2, 1].map((above) => {
     const leading = tones[(bassIndex + above) % 4]?.fifths as Fifths;
     const inversion = ((4 - above) % 4) as Numeral['inversion'];
-    const tonic = leading === root ? fifths(root - 5) : writtenTonic(pitchClassOf(fifths(leading - 5)), 'minor', root - 5);
-    return readingOf({ tonic, mode: 'minor' }, { ...LEADING_TONE_SEVENTH, degree: { step: 7, alter: 1 }, inversion });
+    const numeral: Numeral = { ...LEADING_TONE_SEVENTH, degree: { step: 7, alter: 1 }, inversion };
+    if (leading === root) return readingOf({ tonic: fifths(root - 5), mode: 'minor' }, numeral);
+    return simplestReading(pitchClassOf(fifths(leading - 5)), 'minor', numeral, root - 5);
   });
 }
 
 /** V7 sounds like the German sixth in the key a half step below its tonic: GBDF, of C, is GBDE♯ in B. */
 function germanReading({ root, bass, tones }: SpelledChord): EnharmonicReading {
-  const tonic = writtenTonic((pitchClassOf(root) + 4) % 12, 'major', root + 4);
   const inversion = germanInversionOf(tones.findIndex((tone) => tone.fifths === bass), root, tones);
-  return readingOf({ tonic, mode: 'major' }, { ...GERMAN, inversion });
+  return simplestReading((pitchClassOf(root) + 4) % 12, 'major', { ...GERMAN, inversion }, root + 4);
 }
 
 /** The dominant's members in the German sixth: root is the flat sixth (inversion 1), third do (2), fifth me (3), seventh fi (0). */
@@ -58,17 +58,21 @@ function dominantReading({ tones, bass }: SpelledChord): EnharmonicReading {
   const flatSixth = tones.find((tone) => tone.role === 'third')?.fifths as Fifths;
   const ordered = ['third', 'fifth', 'seventh', 'root'];
   const inversion = ordered.indexOf(tones.find((tone) => tone.fifths === bass)?.role ?? '') as Numeral['inversion'];
-  const tonic = writtenTonic((pitchClassOf(flatSixth) + 5) % 12, 'major', flatSixth - 1);
-  return readingOf({ tonic, mode: 'major' }, { ...DOMINANT, inversion });
+  return simplestReading((pitchClassOf(flatSixth) + 5) % 12, 'major', { ...DOMINANT, inversion }, flatSixth - 1);
 }
 
-/** Of the spellings of a tonic, the written key with the fewest accidentals; between equals, the nearer on the line. */
-function writtenTonic(pitchClass: number, mode: Key['mode'], near: number): Fifths {
-  const spellings = Array.from({ length: 29 }, (_, i) => fifths(i - 14)).filter((f) => pitchClassOf(f) === pitchClass);
-  const written = spellings.filter((tonic) => isWrittenKey({ tonic, mode }));
-  const accidentals = (tonic: Fifths) => Math.abs(signatureOf({ tonic, mode }));
-  const best = written.toSorted((a, b) => accidentals(a) - accidentals(b) || Math.abs(a - near) - Math.abs(b - near))[0];
-  if (best === undefined) throw new Error(`no written key on pitch class ${pitchClass}`);
+/**
+ * Of the spellings of a tonic, the written key with the fewest accidentals; between equals, the one in which the chord
+ * has fewer signs, then the nearer on the line of fifths to `near`.
+ */
+function simplestReading(tonicPitchClass: number, mode: Key['mode'], numeral: Numeral, near: number): EnharmonicReading {
+  const line = Array.from({ length: 29 }, (_, i): Key => ({ tonic: fifths(i - 14), mode }));
+  const written = line.filter((key) => pitchClassOf(key.tonic) === tonicPitchClass && isWrittenKey(key)).map((key) => readingOf(key, numeral));
+  const accidentals = ({ key }: EnharmonicReading) => Math.abs(signatureOf(key));
+  const signs = ({ chord }: EnharmonicReading) => chord.tones.reduce((sum, tone) => sum + Math.abs(alterOf(tone.fifths)), 0);
+  const distance = ({ key }: EnharmonicReading) => Math.abs(key.tonic - near);
+  const [best] = written.toSorted((a, b) => accidentals(a) - accidentals(b) || signs(a) - signs(b) || distance(a) - distance(b));
+  if (!best) throw new Error(`no written key on pitch class ${tonicPitchClass}`);
   return best;
 }
 

@@ -28,7 +28,7 @@ export interface NumeralParts {
   readonly joint: '/' | 'of' | null;
   /** Targets, nearest first; their own `applied` is empty. */
   readonly applied: readonly NumeralParts[];
-  /** The same on one line, for copying and for plain text. */
+  /** The same on one line, for copying and for plain text: `formatNumeral`'s, which can be read again. */
   readonly text: string;
   /** The same in words, for a screen reader. */
   readonly spoken: string;
@@ -42,6 +42,8 @@ export function typesetNumeral(numeral: Numeral, mode: Mode, sheet: ConventionSh
   const runsOn = numeral.special === 'cadential-six-four' && sheet.cadential === 'dominant';
   return {
     ...partsOf(pieces, sheet),
+    // In print the common-tone chord is CT°7 whatever its bass (Integrated Musicianship: Theory, ch. 18b).
+    ...(numeral.special === 'common-tone' ? { figures: ['7'] } : {}),
     runsOn,
     joint: targets.length === 0 ? null : sheet.applied === 'of' ? 'of' : '/',
     applied: targets.map((target) => partsOf(target, sheet)),

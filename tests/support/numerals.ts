@@ -12,11 +12,15 @@ import {
   HALF_DIMINISHED_FORMS,
   NEAPOLITAN_FORMS,
 } from '@/lib/theory/conventions';
+import { formatPitchClassInterval } from '@/lib/theory/interval';
 import { type Degree, type Key, KEYS, MODES, STEPS, parseKey } from '@/lib/theory/key';
 import { ADDED_TONES, type Numeral, SPECIALS, checkNumeral, degreeOfAugmentedSixth } from '@/lib/theory/numeral';
+import { nameChord } from '@/lib/theory/name-chord';
+import { formatNumeral } from '@/lib/theory/numeral-format';
 import { parseNumeral } from '@/lib/theory/numeral-parse';
 import { type Fifths, formatPitchClass, parsePitchClass } from '@/lib/theory/pitch';
 import { spellNumeral } from '@/lib/theory/spell';
+import { tendenciesOf } from '@/lib/theory/tendencies';
 import { unwrap } from '@/lib/result';
 
 /** The key of a text such as `Eb major` or `c#`. */
@@ -74,3 +78,28 @@ const anyShape: fc.Arbitrary<Numeral> = fc
 
 /** Every numeral that the check lets pass. */
 export const anyNumeral: fc.Arbitrary<Numeral> = anyShape.filter((shape) => checkNumeral(shape).length === 0);
+
+/** The intervals from each tone up to the next: `intervals('B D F A')` is `m3 m3 M3`. */
+export function intervals(spelled: string): string {
+  const sounding = tones(spelled);
+  return sounding.slice(1).map((tone, i) => formatPitchClassInterval(sounding[i] as Fifths, tone)).join(' ');
+}
+
+/** What the key calls these tones, bass first, most usual first: `names('C', 'F# A C Eb')[0]` is `vii°7/V`. */
+export function names(keyText: string, spelled: string): string[] {
+  const sounding = tones(spelled);
+  const here = key(keyText);
+  return nameChord(here, { bass: sounding[0] as Fifths, tones: sounding }).map((found) => formatNumeral(found, here.mode));
+}
+
+/** Where the tendency tones go, from the bass up: `pulls('C', 'V7')` is `B>C F>E`. */
+export function pulls(keyText: string, text: string): string {
+  const found = tendenciesOf(key(keyText), numeral(keyText, text)).tones;
+  return found.map((tone) => `${formatPitchClass(tone.fifths)}>${tone.expected.map(formatPitchClass).join('|')}`).join(' ');
+}
+
+/** The chords that a numeral leads to: `targets('C', 'V7')` is `I vi`. */
+export function targets(keyText: string, text: string): string {
+  const here = key(keyText);
+  return tendenciesOf(here, numeral(keyText, text)).targets.map((target) => formatNumeral(target, here.mode)).join(' ');
+}
