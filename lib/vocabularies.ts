@@ -38,6 +38,10 @@ export type AssignmentState = (typeof ASSIGNMENT_STATES)[number];
 export const SUBMISSION_STATES = ['working', 'handed_in', 'marked', 'released'] as const;
 export type SubmissionState = (typeof SUBMISSION_STATES)[number];
 
+/** A printed handout: ordered, ready to fetch, or given up. */
+export const PRINT_STATES = ['queued', 'ready', 'failed'] as const;
+export type PrintState = (typeof PRINT_STATES)[number];
+
 export const JOB_STATES = ['queued', 'running', 'done', 'dead'] as const;
 export type JobState = (typeof JOB_STATES)[number];
 

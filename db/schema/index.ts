@@ -6,3 +6,4 @@ export * from './readings';
 export * from './assignments';
 export * from './questions';
 export * from './work';
+export * from './handouts';

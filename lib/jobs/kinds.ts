@@ -6,6 +6,8 @@ export const JOB_PAYLOADS = {
   read_score: z.object({ scoreId: z.uuid() }),
   /** Fill a reading that is `proposing` with the engine's labels. */
   propose_reading: z.object({ readingId: z.uuid() }),
+  /** Engrave a handout: pages and PDF into the store. */
+  print_handout: z.object({ printId: z.uuid() }),
 } as const;
 
 export type JobKind = keyof typeof JOB_PAYLOADS;
