@@ -41,3 +41,8 @@ export type CutExcerptInput = z.infer<typeof cutExcerptInput>;
 
 export const changeExcerptInput = excerptWords.extend({ excerptId: z.uuid() });
 export type ChangeExcerptInput = z.infer<typeof changeExcerptInput>;
+
+/** `a,b,c` of a query: at most a page of the library at a time. */
+export const scoreStatesInput = z.object({
+  ids: z.string().transform((text) => text.split(',')).pipe(z.array(z.uuid()).max(100)),
+});

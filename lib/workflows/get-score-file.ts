@@ -1,0 +1,24 @@
+import { findScore } from '@/db/queries/scores';
+import type { Actor } from '@/lib/auth/actor';
+import { type AppError, appError } from '@/lib/errors';
+import { type Result, err, ok } from '@/lib/result';
+import type { Deps } from './deps';
+import type { ScoreInput } from './library-input';
+
+export interface ScoreFile {
+  readonly bytes: Uint8Array<ArrayBuffer>;
+  readonly fileName: string;
+  readonly mediaType: string;
+}
+
+/** Source: W3C MusicXML 4.0, media types of compressed and of plain files. */
+const COMPRESSED = 'application/vnd.recordare.musicxml';
+const PLAIN = 'application/vnd.recordare.musicxml+xml';
+
+/** The uploaded file of a score, byte for byte. */
+export async function getScoreFile(deps: Deps, actor: Actor, { scoreId }: ScoreInput): Promise<Result<ScoreFile, AppError>> {
+  const score = await findScore(deps.db, actor, scoreId);
+  const bytes = score ? await deps.storage.get(score.sha256) : null;
+  if (!score || !bytes) return err(appError('not_found'));
+  return ok({ bytes, fileName: score.fileName, mediaType: /\.mxl$/i.test(score.fileName) ? COMPRESSED : PLAIN });
+}
