@@ -18,6 +18,8 @@ export interface ScoreBar {
   readonly number: string;
   readonly start: number;
   readonly length: number;
+  /** Starts of the felt beats, in ticks from the bar's start; absent in scores read before this was kept. */
+  readonly beats?: readonly number[];
 }
 
 export interface ScoreRemark {

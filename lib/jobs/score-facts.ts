@@ -1,3 +1,4 @@
+import { beatStarts } from '@/lib/score/metre';
 import type { Score } from '@/lib/score/score';
 
 /** What the library shows of a score, and what cutting excerpts needs; the notes stay in the file. */
@@ -6,7 +7,7 @@ export interface ScoreFacts {
   readonly work: string;
   readonly composer: string;
   readonly ticksPerQuarter: number;
-  readonly bars: readonly { readonly index: number; readonly number: string; readonly start: number; readonly length: number }[];
+  readonly bars: readonly { readonly index: number; readonly number: string; readonly start: number; readonly length: number; readonly beats: readonly number[] }[];
   readonly noteCount: number;
   /** The first key signature; null when the file has none. */
   readonly keyFifths: number | null;
@@ -22,7 +23,7 @@ export function factsOf(score: Score): ScoreFacts {
     work: score.work,
     composer: score.composer,
     ticksPerQuarter: score.ticksPerQuarter,
-    bars: score.bars.map(({ index, number, start, length }) => ({ index, number, start, length })),
+    bars: score.bars.map((bar) => ({ index: bar.index, number: bar.number, start: bar.start, length: bar.length, beats: beatStarts(score, bar) })),
     noteCount: score.notes.length,
     keyFifths: score.keySignatures[0]?.fifths ?? null,
     warnings: score.warnings.slice(0, WARNINGS),
