@@ -95,9 +95,10 @@ export function findSeventhChord(triad: Triad, seventh: SeventhSize): Quality | 
   return QUALITIES.find((q) => sizeOf(q) === 4 && triadOf(q) === triad && seventhOf(q) === seventh) ?? null;
 }
 
-/** The quality without its ninth, as the report contract counts it. */
-export function withoutNinth(quality: Quality): Quality {
-  return sizeOf(quality) === 5 ? 'dominant-seventh' : quality;
+/** The quality as the report contract names it: ninths without the ninth; what it has no name for is `other`. */
+export function qualityInReport(quality: Quality): Quality {
+  if (sizeOf(quality) === 5) return 'dominant-seventh';
+  return quality === 'augmented-seventh' || quality === 'augmented-sixth-swiss' ? 'other' : quality;
 }
 
 /**
@@ -132,9 +133,18 @@ function figuresIn(table: typeof FIGURES, quality: Quality, inversion: number): 
   return table[sizeOf(quality)]?.[inversion] ?? [];
 }
 
+export interface FigureForm {
+  readonly size: 3 | 4 | 5;
+  readonly inversion: 0 | 1 | 2 | 3 | 4;
+  /** A 4 stands where the 3 would: the third is suspended. */
+  readonly suspended?: true;
+}
+
 /** Every way to write figures, digits only, and what each says. Source as above: the shorter forms leave out what is implied. */
-export const FIGURE_FORMS: Readonly<Record<string, { readonly size: 3 | 4 | 5; readonly inversion: 0 | 1 | 2 | 3 | 4 }>> = {
+export const FIGURE_FORMS: Readonly<Record<string, FigureForm>> = {
+  '5': { size: 3, inversion: 0 },
   '53': { size: 3, inversion: 0 },
+  '54': { size: 3, inversion: 0, suspended: true },
   '6': { size: 3, inversion: 1 },
   '63': { size: 3, inversion: 1 },
   '64': { size: 3, inversion: 2 },
@@ -142,6 +152,8 @@ export const FIGURE_FORMS: Readonly<Record<string, { readonly size: 3 | 4 | 5; r
   '75': { size: 4, inversion: 0 },
   '73': { size: 4, inversion: 0 },
   '753': { size: 4, inversion: 0 },
+  '74': { size: 4, inversion: 0, suspended: true },
+  '754': { size: 4, inversion: 0, suspended: true },
   '65': { size: 4, inversion: 1 },
   '653': { size: 4, inversion: 1 },
   '43': { size: 4, inversion: 2 },

@@ -1,5 +1,5 @@
 import { type Result, ok } from '../result';
-import { FIGURE_FORMS, type Quality, type SeventhSize, type Triad, sizeOf } from './chord';
+import { FIGURE_FORMS, type FigureForm, type Quality, type SeventhSize, type Triad, sizeOf } from './chord';
 import { type ConventionSheet, DEFAULT_CONVENTIONS, looksCadential } from './conventions';
 import { degreeOfSigns, getSeventhChord, isDiatonicHalfDiminished, plainNinth, plainSeventh, plainTriad } from './diatonic';
 import type { Degree, Mode } from './key';
@@ -142,9 +142,7 @@ interface ReadChord {
   readonly added: readonly AddedTone[];
 }
 
-interface ReadFigures {
-  readonly size: 3 | 4 | 5;
-  readonly inversion: Inversion;
+interface ReadFigures extends FigureForm {
   /** A seventh that the figures alter: ♭7, ♯7. */
   readonly seventh: SeventhSize | null;
   readonly ninth: 'major' | 'minor' | null;
@@ -155,11 +153,11 @@ function readChord(head: RomanHead, degree: Degree, triad: Triad, frame: Frame):
   if (!figures.ok) return figures;
   const wrong = checkTail(head, figures.value, triad, frame);
   if (wrong) return wrong;
-  if (figures.value.size === 3) return ok({ quality: triad, inversion: figures.value.inversion, added: [] });
+  const { size, inversion, suspended } = figures.value;
+  const added: AddedTone[] = suspended ? ['sus4'] : [];
+  if (size === 3) return ok({ quality: triad, inversion, added });
   const seventh = readSeventh(head, figures.value, degree, triad, frame);
-  return figures.value.size === 4
-    ? ok({ quality: seventh, inversion: figures.value.inversion, added: [] })
-    : readNinth(head, figures.value, seventh, degree, frame);
+  return size === 4 ? ok({ quality: seventh, inversion, added }) : readNinth(head, figures.value, seventh, degree, frame);
 }
 
 function readFigures({ figures }: RomanHead | NamedHead, text: string): Read<ReadFigures> {
@@ -310,8 +308,8 @@ function readAugmentedSixth(head: NamedHead, name: keyof typeof AUGMENTED_SIXTHS
 function readNeapolitan(head: NamedHead, frame: Frame): Read<Numeral> {
   const figures = readFigures(head, frame.text);
   if (!figures.ok) return figures;
-  const { size, inversion } = figures.value;
-  if (head.mark || size === 5) return stopAt(frame.text, head.mark?.at ?? head.figures[0]?.at ?? 0, 'the Neapolitan is a major triad; expected N6, or N7 with its inversions.');
+  const { size, inversion, suspended } = figures.value;
+  if (head.mark || size === 5 || suspended) return stopAt(frame.text, head.mark?.at ?? head.figures[0]?.at ?? 0, 'the Neapolitan is a major triad; expected N6, or N7 with its inversions.');
   const quality = size === 3 ? 'major' : 'major-seventh';
   return readNotes(head.notes, { ...NO_CONTEXT, degree: { step: 2, alter: -1 }, quality, inversion }, frame);
 }
@@ -321,7 +319,7 @@ function readCommonTone(head: NamedHead, { text }: Frame): Read<Numeral> {
   if (!figures.ok) return figures;
   if (head.mark?.value !== 'diminished') return stopAt(text, head.mark?.at ?? head.name.at + 2, 'the common-tone chord is a diminished seventh; expected CT°7.');
   const first = head.figures[0];
-  if (first && figures.value.size !== 4) return stopAt(text, first.at, 'the common-tone chord is a diminished seventh; expected CT°7.');
+  if (first && (figures.value.size !== 4 || figures.value.suspended)) return stopAt(text, first.at, 'the common-tone chord is a diminished seventh; expected CT°7.');
   const note = head.notes[0];
   if (note) return stopAt(text, note.at, 'the common-tone chord takes no added tones.');
   return ok({ ...NO_CONTEXT, degree: { step: 2, alter: 1 }, quality: 'diminished-seventh', inversion: figures.value.inversion, special: 'common-tone' });
