@@ -18,18 +18,21 @@ export interface PlacedNote {
 
 /**
  * Written notes → sounding notes. A note that ends a tie lengthens the note of the same part and spelled pitch that
- * begins one and ends where it starts; in the same voice before any other. A tie that leads nowhere (into a second
- * ending, over a rest, let-ring) joins nothing. Ties between different spellings join nothing: spelling is kept.
+ * begins one: the one that ends where it starts, in the same voice before any other; or else the last one that ended
+ * earlier in the same bar or the bar before (a broken chord whose notes are tied into a full one), unless that pitch
+ * was struck again meanwhile. A tie that leads nowhere (into a second ending, let-ring) joins nothing. Ties between
+ * different spellings join nothing: spelling is kept.
  */
 export function mergeTies(draft: Draft, bars: readonly Bar[]): PlacedNote[] {
   const placed: PlacedNote[] = [];
-  const open = new Map<string, PlacedNote[]>();
+  const open = new Map<string, OpenTie[]>();
   for (const index of orderInTime(draft, bars)) {
     const written = draft.notes[index] as WrittenNote;
     const bar = bars[written.bar] as Bar;
     const start = bar.start + Math.min(written.at, bar.length);
     const duration = bar.start + endInBar(draft, written, bar) - start;
     const joined = written.tieStop ? takeOpen(open, written, start) : undefined;
+    if (!written.tieStop) dropStruckAgain(open, written, start);
     const note = joined ? lengthen(joined, start, duration, index) : place(written, start, duration, index);
     if (!joined) placed.push(note);
     if (written.tieStart) keepOpen(open, written, note);
@@ -68,17 +71,39 @@ function nameOf({ part, pitch }: WrittenNote): string {
   return `${part}/${pitch.fifths}/${pitch.octave}`;
 }
 
-function keepOpen(open: Map<string, PlacedNote[]>, written: WrittenNote, note: PlacedNote): void {
-  const name = nameOf(written);
-  const same = open.get(name);
-  if (same) same.push(note);
-  else open.set(name, [note]);
+/** A note whose tie has not been ended yet, and the bar of its last written note. */
+interface OpenTie {
+  readonly note: PlacedNote;
+  readonly bar: number;
 }
 
-function takeOpen(open: Map<string, PlacedNote[]>, written: WrittenNote, start: number): PlacedNote | undefined {
-  const candidates = open.get(nameOf(written))?.filter((note) => note.start + note.duration >= start) ?? [];
-  const fitting = candidates.filter((note) => note.start + note.duration === start);
-  const chosen = fitting.find(({ voice, staff }) => voice === written.voice && staff === written.staff) ?? fitting[0];
-  open.set(nameOf(written), candidates.filter((note) => note !== chosen));
-  return chosen;
+function endOf(note: PlacedNote): number {
+  return note.start + note.duration;
+}
+
+function keepOpen(open: Map<string, OpenTie[]>, written: WrittenNote, note: PlacedNote): void {
+  const name = nameOf(written);
+  const same = open.get(name);
+  if (same) same.push({ note, bar: written.bar });
+  else open.set(name, [{ note, bar: written.bar }]);
+}
+
+function takeOpen(open: Map<string, OpenTie[]>, written: WrittenNote, start: number): PlacedNote | undefined {
+  const candidates = open.get(nameOf(written)) ?? [];
+  const chosen = chooseOpen(candidates, written, start);
+  if (chosen) open.set(nameOf(written), candidates.filter((tie) => tie !== chosen));
+  return chosen?.note;
+}
+
+function chooseOpen(candidates: readonly OpenTie[], written: WrittenNote, start: number): OpenTie | undefined {
+  const meeting = candidates.filter(({ note }) => endOf(note) === start);
+  const own = meeting.find(({ note }) => note.voice === written.voice && note.staff === written.staff);
+  return own ?? meeting[0] ?? candidates.findLast(({ note, bar }) => endOf(note) < start && bar >= written.bar - 1);
+}
+
+/** A new stroke of the pitch ends the wait of ties that ended before it. */
+function dropStruckAgain(open: Map<string, OpenTie[]>, written: WrittenNote, start: number): void {
+  const name = nameOf(written);
+  const candidates = open.get(name);
+  if (candidates) open.set(name, candidates.filter(({ note }) => endOf(note) >= start));
 }
