@@ -155,3 +155,8 @@ export async function hasHeartbeatSince(db: Db, since: Date): Promise<boolean> {
     .limit(1);
   return rows.length > 0;
 }
+
+/** Rejects when the database does not answer. */
+export async function pingDatabase(db: Db): Promise<void> {
+  await db.execute(sql`select 1`);
+}

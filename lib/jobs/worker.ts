@@ -2,11 +2,11 @@ import { deleteEndedJobs, deleteHeartbeat, deleteHeartbeatsBefore, returnJobs, s
 import { deleteSentMails } from '@/db/queries/outbox-delivery';
 import { describeError } from '@/lib/log';
 import type { Mailer } from '@/lib/mail/mailer';
-import { sendDueMails } from '@/lib/mail/outbox';
 import type { Deps } from '@/lib/workflows/deps';
 import { HEARTBEAT_EVERY_MS } from './heartbeat';
 import { pause, repeat } from './pause';
 import { type JobHandlers, type WorkerContext, runNextJob } from './run-job';
+import { sendDueMails } from './send-mails';
 
 const POLL_EVERY_MS = 400;
 const TIDY_EVERY_MS = 3_600_000;

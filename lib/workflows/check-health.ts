@@ -1,6 +1,5 @@
-import { sql } from 'drizzle-orm';
 import type { Db } from '@/db/client';
-import { hasHeartbeatSince } from '@/db/queries/jobs';
+import { hasHeartbeatSince, pingDatabase } from '@/db/queries/jobs';
 import { HEARTBEAT_LASTS_MS } from '@/lib/jobs/heartbeat';
 import { type Log, describeError } from '@/lib/log';
 import type { Mailer } from '@/lib/mail/mailer';
@@ -29,7 +28,7 @@ const CHECK_WITHIN_MS = 4_000;
 /** Asks every part at the same time; one that does not answer within four seconds is down. */
 export async function checkHealth(deps: HealthDeps): Promise<Health> {
   const checks: Readonly<Record<Part, () => Promise<unknown>>> = {
-    database: () => deps.db.execute(sql`select 1`),
+    database: () => pingDatabase(deps.db),
     store: () => deps.storage.check(),
     mail: () => deps.mailer.check(),
     worker: () => checkWorker(deps),

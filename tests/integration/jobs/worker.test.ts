@@ -26,6 +26,7 @@ function notingHandlers(fails: (scoreId: string) => boolean = () => false) {
       },
       giveUp: async (_deps, { scoreId }) => void givenUp.push(scoreId),
     },
+    print_handout: { run: async () => {}, giveUp: async () => {} },
     propose_reading: { run: async () => {}, giveUp: async () => {} },
   };
   return { ran, givenUp, handlers };

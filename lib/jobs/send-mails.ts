@@ -1,8 +1,8 @@
 import type { Db } from '@/db/client';
 import { type ClaimedMail, buryMail, claimMails, markMailSent, retryMail } from '@/db/queries/outbox-delivery';
-import { formatFailure, retryAfter } from '@/lib/jobs/retry';
 import { type Log, describeError } from '@/lib/log';
-import type { Mailer } from './mailer';
+import type { Mailer } from '@/lib/mail/mailer';
+import { formatFailure, retryAfter } from './retry';
 
 export interface OutboxDeps {
   readonly db: Db;
