@@ -41,7 +41,7 @@ export async function installNpmPackages() {
 /** Debian packages by the program that tells whether they are there. */
 export const MARIADB = { program: '/usr/sbin/mariadbd', packages: ['mariadb-server-core', 'mariadb-client-core'] };
 export const CHROMIUM = { program: '/usr/bin/chromium', packages: ['chromium'] };
-export const XMLLINT = { program: '/usr/bin/xmllint', packages: ['libxml2-utils'] };
+export const PYTHON = { program: '/usr/bin/python3', packages: ['python3'] };
 
 async function aptGet(...args) {
   const env = { ...process.env, DEBIAN_FRONTEND: 'noninteractive' };
@@ -59,7 +59,7 @@ async function installDebianPackages(packages) {
 
 /** Installs what is missing of `needs`; without root, says what to install. */
 export async function installPrograms(needs) {
-  const packages = needs.filter(({ program }) => !existsSync(program)).flatMap((need) => need.packages);
+  const packages = [...new Set(needs.filter(({ program }) => !existsSync(program)).flatMap((need) => need.packages))];
   if (packages.length === 0) return;
   const command = `apt-get install -y --no-install-recommends ${packages.join(' ')}`;
   if (process.getuid?.() !== 0) throw new SetupError(`Some programs are missing. As root: ${command}`);
