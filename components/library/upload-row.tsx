@@ -15,7 +15,7 @@ export function UploadRow({ upload, dispatch }: UploadRowProps) {
   const { id, file, stage } = upload;
   const removable = stage !== 'sending' && stage !== 'queued';
   return (
-    <li className="grid grid-cols-[minmax(0,1fr)_auto] items-start gap-x-4 gap-y-2 border-t border-rule py-3 lg:grid-cols-[minmax(0,15rem)_minmax(0,1fr)_auto]">
+    <li className="grid grid-cols-[minmax(0,1fr)_auto] items-start gap-x-4 gap-y-2 border-t border-rule py-3 first:border-t-0 lg:grid-cols-[minmax(0,15rem)_minmax(0,1fr)_auto]">
       <div className="min-w-0">
         <p className="font-medium break-words">{file.name}</p>
         <p className="text-small text-ink-soft">{formatBytes(file.size)}</p>
@@ -89,7 +89,7 @@ function ProblemOfUpload({ upload, dispatch }: UploadRowProps) {
     <div role="alert">
       <StateMark state={stage === 'existing' ? 'closed' : stage}>{WORD[stage]}</StateMark>
       <p><span className="sr-only">{file.name}: </span>{problem}</p>
-      {place ? <p className="text-small text-ink-soft">At {place}.</p> : null}
+      {place && !problem?.includes(place) ? <p className="text-small text-ink-soft">At {place}.</p> : null}
       {scoreId ? <Link href={`/scores/${scoreId}`} className="link">Open the score</Link> : null}
       {stage === 'failed' ? (
         <Button size="small" className="mt-1" onClick={() => dispatch({ kind: 'retried', id })}>Try again</Button>
