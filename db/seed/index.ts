@@ -1,5 +1,5 @@
 /** Fills the demo: run it as often as you like, it adds what is missing and changes nothing that is there. */
-import { count, eq } from 'drizzle-orm';
+import { and, count, eq } from 'drizzle-orm';
 import { unsafeLoadReadingContent } from '@/db/queries/reading-rows';
 import { readings, scores } from '@/db/schema';
 import { type Deps, createDeps } from '@/lib/workflows/deps';
@@ -7,18 +7,21 @@ import { addRemark } from '@/lib/workflows/remarks';
 import { actorOf, must } from './actors';
 import { seedHymnAssignment, seedOtherAssignments, seedStaircaseAssignment } from './assignments';
 import { type SeededExcerpt, seedOwnReading, seedPiece } from './library';
+import { DEMO_PIECES } from './music';
 import { DEPARTMENT, seedPeople } from './people';
 import { acceptSome, shareReading, startOwn } from './readings';
 
 async function seed(): Promise<void> {
   const deps = createDeps();
   await seedPeople(deps);
-  if (await hasScores(deps)) return;
+  if (await hasDemoScores(deps)) return;
   await seedWork(deps);
 }
 
-async function hasScores(deps: Deps): Promise<boolean> {
-  const [row] = await deps.db.select({ n: count() }).from(scores).where(eq(scores.departmentId, DEPARTMENT.id));
+/** Also when somebody has deleted them since: what people took out is not put back. */
+async function hasDemoScores(deps: Deps): Promise<boolean> {
+  const own = and(eq(scores.departmentId, DEPARTMENT.id), eq(scores.source, DEMO_PIECES.eveningHymn.source));
+  const [row] = await deps.db.select({ n: count() }).from(scores).where(own);
   return (row?.n ?? 0) > 0;
 }
 
