@@ -3,6 +3,7 @@ import { type ConventionSheet, DEFAULT_CONVENTIONS, looksCadential } from './con
 import { type Signs, isDiatonicHalfDiminished, plainNinth, plainSeventh, plainTriad, signsOf } from './diatonic';
 import type { Degree, Mode } from './key';
 import { type Numeral, type Special, type Target, isNeapolitan } from './numeral';
+import { ROMANS } from './numeral-scan';
 
 /**
  * A numeral taken apart for print, before any typesetting: `♭`, `VI`, `+`, `maj`, 6 5, `add6`. Text and typesetting both
@@ -10,10 +11,12 @@ import { type Numeral, type Special, type Target, isNeapolitan } from './numeral
  */
 export interface NumeralPieces {
   readonly signs: Signs;
-  /** `vii`, `N`, `Ger`, `CT`, `Cad`, `Ped`; figures that stand alone have ''. */
+  /** `vii`, `N`, `Ger`, `CT`, `Cad`, `Ped`. */
   readonly letters: string;
   readonly isName: boolean;
   readonly mark: '' | '°' | 'ø' | '+' | '?' | 'M' | 'm';
+  /** The held degree of a pedal that is not the tonic's: `V`, `♭VI`. */
+  readonly held: string;
   /** Names a seventh that is not the key's own. */
   readonly seventh: '' | 'maj' | 'dom' | 'min';
   /** Top first; an altered ninth carries its sign: `♭9`. */
@@ -21,8 +24,7 @@ export interface NumeralPieces {
   readonly notes: readonly string[];
 }
 
-const ROMANS = ['I', 'II', 'III', 'IV', 'V', 'VI', 'VII'] as const;
-const PLAIN = { signs: 0, isName: false, mark: '', seventh: '', figures: [], notes: [] } as const;
+const PLAIN = { signs: 0, isName: false, mark: '', held: '', seventh: '', figures: [], notes: [] } as const;
 
 /** The pieces of the chord itself, without its targets. `mode` is that of the local key. */
 export function piecesOf(numeral: Numeral, mode: Mode, sheet: ConventionSheet): NumeralPieces {
@@ -40,8 +42,8 @@ export function piecesOf(numeral: Numeral, mode: Mode, sheet: ConventionSheet): 
 
 function pedalPieces({ degree }: Numeral, mode: Mode, sheet: ConventionSheet): NumeralPieces {
   const onTonic = degree.step === 1 && degree.alter === 0;
-  const held = onTonic ? '' : ` ${formatSigns(signsOf(mode, degree, 'major', sheet.accidentals))}${ROMANS[degree.step - 1] as string}`;
-  return { ...PLAIN, letters: `Ped${held}`, isName: true };
+  const held = onTonic ? '' : `${formatSigns(signsOf(mode, degree, 'major', sheet.accidentals))}${ROMANS[degree.step - 1] as string}`;
+  return { ...PLAIN, letters: 'Ped', isName: true, held };
 }
 
 function cadentialPieces(numeral: Numeral, mode: Mode, sheet: ConventionSheet): NumeralPieces {
@@ -75,6 +77,7 @@ function romanPieces(numeral: Numeral, mode: Mode, sheet: ConventionSheet): Nume
     letters: casedLetters(degree, triad, sheet),
     isName: false,
     mark: quality === 'other' ? '?' : markOf(numeral, triad, mode, sheet),
+    held: '',
     seventh: seventhWordOf(numeral, triad, mode, sheet),
     figures: figuresWithNinth(numeral, mode),
     notes: notesOf(numeral, mode, sheet),
@@ -177,9 +180,11 @@ export function formatNumeral(numeral: Numeral, mode: Mode, sheet: ConventionShe
   return [formatPieces(piecesOf(numeral, mode, sheet), sheet), ...targets].join(joint);
 }
 
-function formatPieces({ signs, letters, mark, seventh, figures, notes }: NumeralPieces, sheet: ConventionSheet): string {
+function formatPieces(pieces: NumeralPieces, sheet: ConventionSheet): string {
+  const { signs, letters, mark, held, seventh, figures, notes } = pieces;
   const figured = figures.join(sheet.figures === 'slashed' ? '/' : '');
-  return `${formatSigns(signs)}${letters}${mark}${seventh}${figured}${notes.length > 0 ? `(${notes.join(',')})` : ''}`;
+  const noted = notes.length > 0 ? `(${notes.join(',')})` : '';
+  return `${formatSigns(signs)}${letters}${mark}${held && ` ${held}`}${seventh}${figured}${noted}`;
 }
 
 const PLAIN_SIGNS: Readonly<Record<string, string>> = { '♭': 'b', '♯': '#', '♮': 'n', '°': 'o', ø: '0' };

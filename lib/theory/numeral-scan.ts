@@ -2,6 +2,7 @@ import { type Result, err, ok } from '../result';
 import type { Signs } from './diatonic';
 import type { AddedTone } from './numeral';
 import { STEPS, type Step } from './key';
+import { STOPPED, saysMixedCase, saysNoNumeral } from './numeral-messages';
 
 /**
  * First pass of reading a typed numeral: its tokens with their places, nothing understood yet. A numeral is a head, then
@@ -112,14 +113,14 @@ export function scanNumeral(text: string): Result<ScannedNumeral, NumeralError> 
 }
 
 const NAMES: readonly (readonly [RegExp, ChordName])[] = [
-  [/It(?:alian)?(?![a-z])/i, 'It'],
-  [/Fr(?:ench)?(?![a-z])/i, 'Fr'],
-  [/G(?:erman|er|r)(?![a-z])/i, 'Ger'],
-  [/Sw(?:iss)?(?![a-z])/i, 'Sw'],
-  [/N(?:eapolitan)?(?![a-z])/, 'N'],
-  [/CT(?=[\s°º˚od]|$)/i, 'CT'],
-  [/Cad\.?(?![a-z])/i, 'Cad'],
-  [/Ped(?:al)?\.?(?![a-z])/i, 'Ped'],
+  [/It(?:alian)?/i, 'It'],
+  [/Fr(?:ench)?/i, 'Fr'],
+  [/G(?:erman|er|r)/i, 'Ger'],
+  [/Sw(?:iss)?/i, 'Sw'],
+  [/N(?:eapolitan)?/, 'N'],
+  [/CT/i, 'CT'],
+  [/Cad\.?/i, 'Cad'],
+  [/Ped(?:al)?\.?/i, 'Ped'],
 ];
 
 function scanHead(reader: Reader): Result<RomanHead | NamedHead, NumeralError> {
@@ -127,7 +128,7 @@ function scanHead(reader: Reader): Result<RomanHead | NamedHead, NumeralError> {
   for (const [pattern, name] of NAMES) {
     if (reader.take(pattern)) return scanNamed(reader, { value: name, at });
   }
-  const roman = scanRoman(reader, 'a numeral from I to VII (or It6, Fr43, Ger65, N6, CT°7, Cad64, Ped)');
+  const roman = scanRoman(reader, STOPPED.beforeNumeral);
   if (!roman.ok) return roman;
   const tail = scanTail(reader);
   return tail.ok ? ok({ form: 'roman', roman: roman.value, ...tail.value }) : tail;
@@ -137,7 +138,7 @@ function scanNamed(reader: Reader, name: Token<ChordName>): Result<NamedHead, Nu
   let held: Roman | null = null;
   reader.skipSpace();
   if (name.value === 'Ped' && !reader.atEnd) {
-    const roman = scanRoman(reader, 'the held degree, as in Ped V');
+    const roman = scanRoman(reader, STOPPED.beforeHeld);
     if (!roman.ok) return roman;
     held = roman.value;
   }
@@ -151,15 +152,15 @@ function scanRoman(reader: Reader, expected: string): Result<Roman, NumeralError
   reader.skipSpace();
   const letters = reader.take(/[ivIV]+/)?.[0];
   const start = reader.at - (letters?.length ?? 0);
-  if (!letters) return stopAt(reader.text, reader.at, `expected ${expected}.`);
-  const step = STEPS[ROMANS.indexOf(letters.toUpperCase())];
-  if (!step) return stopAt(reader.text, start + longestRoman(letters), `“${letters}” is no numeral from I to VII.`);
-  const mixed = /^(?:[IV]+[iv]|[iv]+[IV])/.exec(letters);
-  if (mixed) return stopAt(reader.text, start + mixed[0].length - 1, `“${letters}” mixes capital and small letters; write ${letters.toUpperCase()} or ${letters.toLowerCase()}.`);
+  if (!letters) return stopAt(reader.text, reader.at, expected);
+  const step = STEPS[ROMANS.findIndex((roman) => roman === letters.toUpperCase())];
+  if (!step) return stopAt(reader.text, start + longestRoman(letters), saysNoNumeral(letters));
+  const mixed = /^(?:[IV]+[iv]|[iv]+[IV])/.exec(letters)?.[0];
+  if (mixed) return stopAt(reader.text, start + mixed.length - 1, saysMixedCase(letters));
   return ok({ at, signs, step, capital: letters === letters.toUpperCase() });
 }
 
-const ROMANS = ['I', 'II', 'III', 'IV', 'V', 'VI', 'VII'];
+export const ROMANS = ['I', 'II', 'III', 'IV', 'V', 'VI', 'VII'] as const;
 
 function longestRoman(letters: string): number {
   let length = letters.length;
@@ -263,11 +264,11 @@ function scanBracket(reader: Reader): Result<Token<Note>[], NumeralError> {
   const notes: Token<Note>[] = [];
   do {
     const note = takeFirst(reader, BRACKETED_NOTES);
-    if (!note) return stopAt(reader.text, reader.at, 'expected add4, add6, add9, sus2, sus4, or for a six-four pass, ped, arp or plain, within the brackets.');
+    if (!note) return stopAt(reader.text, reader.at, STOPPED.inBrackets);
     notes.push(note);
   } while (reader.take(/\s*,/));
   if (reader.take(/\s*[)\]]/)) return ok(notes);
-  return stopAt(reader.text, reader.at, 'expected the closing bracket.');
+  return stopAt(reader.text, reader.at, STOPPED.openBracket);
 }
 
 function scanTargets(reader: Reader): Result<TargetHead[], NumeralError> {
@@ -286,7 +287,7 @@ function scanTarget(reader: Reader): Result<TargetHead, NumeralError> {
   reader.skipSpace();
   const at = reader.at;
   if (reader.take(/N/)) return ok({ at, neapolitan: true });
-  const roman = scanRoman(reader, 'the numeral of the chord that is tonicised, such as V or ii');
+  const roman = scanRoman(reader, STOPPED.beforeTarget);
   return roman.ok ? ok({ ...roman.value, mark: scanTargetMark(reader) }) : roman;
 }
 
@@ -298,10 +299,9 @@ function scanTargetMark(reader: Reader): 'capital-major' | 'capital-minor' | nul
 
 function expectedAfter(text: string, at: number, inTarget: boolean): string {
   const rest = text.slice(at);
-  if (inTarget && /^(?:[°º˚oøØ0]|dim)/.test(rest)) return 'a diminished triad cannot be tonicised; a target is a major or minor triad.';
-  if (inTarget && /^\+/.test(rest)) return 'an augmented triad cannot be tonicised; a target is a major or minor triad.';
-  if (inTarget && /^\d/.test(rest)) return 'a target takes no figures; they stand before the slash.';
-  if (inTarget) return 'expected the end, or “/” and one more target.';
-  if (/^(?:[°º˚øØ+]|o(?![a-z]))/.test(rest)) return 'the marks ° ø + stand directly after the numeral, before the figures.';
-  return 'expected figures (6, 64, 7, 65, 43, 42, 9), a mark (° ø +), an added tone (add6, sus4), or “/” and a target.';
+  if (inTarget && /^(?:[°º˚oøØ0]|dim)/.test(rest)) return STOPPED.targetDiminished;
+  if (inTarget && /^\+/.test(rest)) return STOPPED.targetAugmented;
+  if (inTarget && /^\d/.test(rest)) return STOPPED.targetFigures;
+  if (inTarget) return STOPPED.afterTarget;
+  return /^(?:[°º˚øØ+]|o(?![a-z]))/.test(rest) ? STOPPED.lateMark : STOPPED.afterChord;
 }

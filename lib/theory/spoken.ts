@@ -14,6 +14,7 @@ const NAME_WORDS: Readonly<Record<string, string>> = {
   N: 'Neapolitan',
   CT: 'common-tone',
   Cad: 'cadential',
+  Ped: 'pedal',
 };
 
 const MARK_WORDS: Readonly<Record<NumeralPieces['mark'], string>> = {
@@ -48,24 +49,30 @@ const NOTE_WORDS: Readonly<Record<string, string>> = {
 
 /** One chord in words, without its targets. */
 export function speakPieces(pieces: NumeralPieces): string {
-  const { signs, letters, mark, seventh, figures, notes } = pieces;
-  const chord = [speakSigns(signs), speakLetters(pieces), mark === '+' && letters in NAME_WORDS ? '' : MARK_WORDS[mark], SEVENTH_WORDS[seventh]];
-  const spoken = [...chord, ...figures.map(speakFigure), ...notes.map((note) => NOTE_WORDS[note] ?? note)];
-  return spoken.filter((word) => word !== '').join(' ');
+  const { signs, letters, isName, mark, held, seventh, figures, notes } = pieces;
+  const words = [
+    speakSigns(signs),
+    isName ? (NAME_WORDS[letters] ?? letters) : speakRoman(letters, mark),
+    // In Ger+6 the plus belongs to the sixth, not to a triad.
+    isName && mark === '+' ? '' : MARK_WORDS[mark],
+    held && `on ${speakHeld(held)}`,
+    SEVENTH_WORDS[seventh],
+    ...figures.map(speakFigure),
+    ...notes.map((note) => NOTE_WORDS[note] ?? note),
+  ];
+  return words.filter((word) => word !== '').join(' ');
 }
 
-/** Capitals are major and small letters minor: what the ear cannot see in the letter is said. */
-function speakLetters({ letters, isName, mark, signs }: NumeralPieces): string {
-  if (letters.startsWith('Ped')) return ['pedal', ...letters.slice(3).trim().split(/(?=[IV])/).slice(0, 1).map(() => letters.slice(3).trim()).filter(Boolean).map(speakHeld)].join(' ');
-  if (isName) return NAME_WORDS[letters] ?? letters;
+/** The ear cannot see a small letter: without a mark that says more it is a minor chord. */
+function speakRoman(letters: string, mark: NumeralPieces['mark']): string {
   const word = STEP_WORDS[letters.toUpperCase()] ?? letters;
-  const isSmall = letters !== letters.toUpperCase();
-  return isSmall && mark === '' && signs !== undefined ? `minor ${word}` : word;
+  return letters === letters.toUpperCase() || mark !== '' ? word : `minor ${word}`;
 }
 
 function speakHeld(held: string): string {
-  const roman = held.replace(/[♭♯♮]/gu, '');
-  return `on ${[speakSigns(held.startsWith('♭') ? -1 : held.startsWith('♯') ? 1 : 0), STEP_WORDS[roman] ?? roman].filter(Boolean).join(' ')}`;
+  const letters = held.replace(/^[♭♯]+/u, '');
+  const signs = held.length - letters.length;
+  return [speakSigns(held.startsWith('♭') ? -signs : signs), STEP_WORDS[letters] ?? letters].filter(Boolean).join(' ');
 }
 
 function speakSigns(signs: NumeralPieces['signs']): string {

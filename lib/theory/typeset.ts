@@ -53,7 +53,8 @@ export function typesetNumeral(numeral: Numeral, mode: Mode, sheet: ConventionSh
 }
 
 function partsOf(pieces: NumeralPieces, sheet: ConventionSheet): NumeralParts {
-  const { signs, letters, isName, mark, seventh, figures, notes } = pieces;
+  const { signs, isName, mark, held, seventh, figures, notes } = pieces;
+  const letters = [pieces.letters, held].filter(Boolean).join(' ');
   const accidental = formatSigns(signs);
   return {
     accidental,

@@ -41,8 +41,8 @@ describe('pitches and intervals against tonal', () => {
         const interval = intervalBetween(from, to);
         const heard = (Note.midi(nameOf(to)) ?? 0) - (Note.midi(nameOf(from)) ?? 0);
         expect(semitonesOf(interval)).toBe(heard);
-        // Letters up and sound down (E♯4–F♭4): tonal names it -7AA, thirteen semitones, which its own midi() contradicts.
-        fc.pre(expected !== '' && interval.steps * heard >= 0);
+        // Where letters and sound part ways (E♯4–F♭4, C4–B♯3), tonal's name contradicts its own midi(): -7AA for a half step.
+        fc.pre(expected !== '' && (interval.steps === 0 || interval.steps * heard > 0));
         expect([tonalNameOf(interval), semitonesOf(interval)]).toEqual([expected, TonalInterval.semitones(expected) + 0]);
       }),
       { numRuns: 2000 },

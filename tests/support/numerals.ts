@@ -1,6 +1,6 @@
 import fc from 'fast-check';
 
-import { QUALITIES, isAugmentedSixth, sizeOf } from '@/lib/theory/chord';
+import { QUALITIES, type Quality, isAugmentedSixth, sizeOf } from '@/lib/theory/chord';
 import {
   ACCIDENTAL_FORMS,
   APPLIED_FORMS,
@@ -14,7 +14,7 @@ import {
 } from '@/lib/theory/conventions';
 import { formatPitchClassInterval } from '@/lib/theory/interval';
 import { type Degree, type Key, KEYS, MODES, STEPS, parseKey } from '@/lib/theory/key';
-import { ADDED_TONES, type Numeral, SPECIALS, checkNumeral, degreeOfAugmentedSixth } from '@/lib/theory/numeral';
+import { ADDED_TONES, type Numeral, type Special, checkNumeral, degreeOfAugmentedSixth } from '@/lib/theory/numeral';
 import { nameChord } from '@/lib/theory/name-chord';
 import { formatNumeral } from '@/lib/theory/numeral-format';
 import { parseNumeral } from '@/lib/theory/numeral-parse';
@@ -61,23 +61,75 @@ const anyDegree: fc.Arbitrary<Degree> = fc.record({ step: fc.constantFrom(...STE
 
 const anyTarget = fc.record({ degree: anyDegree, mode: anyMode });
 
-/** Any value of the type; most of them are no chord. */
-const anyShape: fc.Arbitrary<Numeral> = fc
-  .record({
-    degree: anyDegree,
-    quality: fc.constantFrom(...QUALITIES),
-    inversion: fc.constantFrom(0, 1, 2, 3, 4),
-    applied: fc.array(anyTarget, { maxLength: 3 }),
-    special: fc.option(fc.constantFrom(...SPECIALS), { nil: null, freq: 2 }),
-    added: fc.subarray([...ADDED_TONES], { maxLength: 2 }),
-  })
-  .map((shape) => ({ ...shape, inversion: (shape.inversion % sizeOf(shape.quality)) as Numeral['inversion'] }))
-  .map((shape) => (isAugmentedSixth(shape.quality) ? { ...shape, degree: degreeOfAugmentedSixth(shape.quality) } : shape))
-  .map((shape) => (shape.special === 'cadential-six-four' ? { ...shape, degree: { step: 1, alter: 0 } as const, inversion: 2 as const } : shape))
-  .map((shape) => (shape.special === 'common-tone' ? { ...shape, degree: { step: 2, alter: 1 } as const, quality: 'diminished-seventh' as const } : shape));
+const anyAdded = fc.oneof({ weight: 3, arbitrary: fc.constant([]) }, { weight: 1, arbitrary: fc.subarray([...ADDED_TONES], { maxLength: 2 }) });
 
-/** Every numeral that the check lets pass. */
-export const anyNumeral: fc.Arbitrary<Numeral> = anyShape.filter((shape) => checkNumeral(shape).length === 0);
+const anyContext = { applied: fc.array(anyTarget, { maxLength: 3 }), special: fc.constant(null), added: fc.constant([]) };
+const plainQuality = fc.constantFrom(...QUALITIES.filter((quality) => !isAugmentedSixth(quality)));
+
+/** Chords that their numeral alone tells, augmented sixths apart. */
+const anyPlain = plainQuality.chain((quality) =>
+  fc.record({ degree: anyDegree, quality: fc.constant(quality), inversion: anyInversion(quality), ...anyContext, added: anyAdded }),
+);
+const anyAugmentedSixth = fc.constantFrom(...QUALITIES.filter(isAugmentedSixth)).chain((quality) =>
+  fc.record({ degree: fc.constant(degreeOfAugmentedSixth(quality)), quality: fc.constant(quality), inversion: anyInversion(quality), ...anyContext }),
+);
+const anyNeapolitan = fc.constantFrom<Quality>('major', 'major-seventh').chain((quality) =>
+  fc.record({
+    ...anyContext,
+    degree: fc.constant({ step: 2, alter: -1 } as const),
+    quality: fc.constant(quality),
+    inversion: anyInversion(quality),
+    special: fc.constant('neapolitan' as const),
+    added: anyAdded,
+  }),
+);
+const anySixFour = fc.record({
+  ...anyContext,
+  degree: anyDegree,
+  quality: fc.constantFrom<Quality>('major', 'minor', 'diminished', 'augmented'),
+  inversion: fc.constant(2 as const),
+  special: fc.constantFrom<Special>('passing-six-four', 'pedal-six-four', 'arpeggiated-six-four'),
+  added: anyAdded,
+});
+const anyCadential = fc.record({
+  ...anyContext,
+  degree: fc.constant({ step: 1, alter: 0 } as const),
+  quality: fc.constantFrom<Quality>('major', 'minor'),
+  inversion: fc.constant(2 as const),
+  special: fc.constant('cadential-six-four' as const),
+});
+const anyCommonTone = fc.record({
+  ...anyContext,
+  degree: fc.constant({ step: 2, alter: 1 } as const),
+  quality: fc.constant('diminished-seventh' as const),
+  inversion: anyInversion('diminished-seventh'),
+  special: fc.constant('common-tone' as const),
+});
+const anyPedal = fc.record({
+  ...anyContext,
+  degree: anyDegree,
+  quality: fc.constant('other' as const),
+  inversion: fc.constant(0 as const),
+  applied: fc.constant([]),
+  special: fc.constant('pedal-tone' as const),
+});
+
+function anyInversion(quality: Quality): fc.Arbitrary<Numeral['inversion']> {
+  return fc.integer({ min: 0, max: sizeOf(quality) - 1 }).map((inversion) => inversion as Numeral['inversion']);
+}
+
+/** Every numeral that the check lets pass; most shapes made here do. */
+export const anyNumeral: fc.Arbitrary<Numeral> = fc
+  .oneof(
+    { weight: 10, arbitrary: anyPlain },
+    { weight: 2, arbitrary: anyAugmentedSixth },
+    { weight: 1, arbitrary: anyNeapolitan },
+    { weight: 2, arbitrary: anySixFour },
+    { weight: 1, arbitrary: anyCadential },
+    { weight: 1, arbitrary: anyCommonTone },
+    { weight: 1, arbitrary: anyPedal },
+  )
+  .filter((shape: Numeral) => checkNumeral(shape).length === 0);
 
 /** The intervals from each tone up to the next: `intervals('B D F A')` is `m3 m3 M3`. */
 export function intervals(spelled: string): string {
