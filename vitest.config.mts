@@ -10,11 +10,11 @@ export default defineConfig({
     projects: [
       {
         resolve: { alias },
-        test: { name: 'unit', include: ['tests/unit/**/*.test.{ts,tsx}'], testTimeout: 30_000 },
+        test: { name: 'unit', include: ['tests/unit/**/*.test.{ts,tsx}'], testTimeout: 60_000 },
       },
       {
         resolve: { alias },
-        test: { name: 'published', include: ['tests/published/**/*.test.ts'], testTimeout: 30_000 },
+        test: { name: 'published', include: ['tests/published/**/*.test.ts'], testTimeout: 60_000 },
       },
       {
         resolve: { alias },
@@ -23,8 +23,8 @@ export default defineConfig({
           include: ['tests/integration/**/*.test.ts'],
           globalSetup: ['tests/support/global-setup.ts'],
           pool: 'forks',
-          testTimeout: 60_000,
-          hookTimeout: 60_000,
+          testTimeout: 120_000,
+          hookTimeout: 240_000,
         },
       },
     ],

@@ -22,7 +22,7 @@ export function takeLock(dataDir) {
   mkdirSync(dataDir, { recursive: true });
   const file = path.join(dataDir, 'running.json');
   const other = findRunning(dataDir);
-  if (other && other.pid !== process.pid) {
+  if (other) {
     const where = other.address ? ` at ${other.address}` : '';
     throw new SetupError(
       `Understave runs already from this folder${where} (process ${other.pid}). Stop that one first, or give this one a data folder of its own: DATA_DIR=…`,

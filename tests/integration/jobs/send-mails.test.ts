@@ -1,4 +1,3 @@
-import { createServer } from 'node:net';
 import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest';
 import { queueMail } from '@/db/queries/outbox';
 import { outbox } from '@/db/schema';
@@ -7,6 +6,7 @@ import { sendDueMails } from '@/lib/jobs/send-mails';
 import type { Mailer } from '@/lib/mail/mailer';
 import { createSmtpMailer } from '@/lib/mail/smtp-mailer';
 import { mailsTo } from '../../support/mail-sink';
+import { unusedPort } from '../../support/ports';
 import { type TestServices, openServices } from '../../support/services';
 
 let services: TestServices;
@@ -68,13 +68,3 @@ describe('sendDueMails', () => {
     expect(await mailsTo('later@students.example.org')).toHaveLength(1);
   });
 });
-
-function unusedPort(): Promise<number> {
-  return new Promise((resolve, reject) => {
-    const server = createServer().once('error', reject);
-    server.listen(0, '127.0.0.1', () => {
-      const address = server.address();
-      server.close(() => (address && typeof address === 'object' ? resolve(address.port) : reject(new Error('no port'))));
-    });
-  });
-}
