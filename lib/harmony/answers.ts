@@ -11,7 +11,12 @@ export function asAnswers(reading: Reading): Reading {
 
 function asAnswer(label: Label): Label {
   const isProposal = label.state === 'suggested';
-  return { ...label, numeral: isProposal ? null : label.numeral, state: 'changed', certainty: null, others: [] };
+  return { ...label, numeral: isProposal ? null : label.numeral, state: isProposal ? 'changed' : label.state, certainty: null, others: [] };
+}
+
+/** A key as a student may see it once it is shown: its numerals, and nothing of how they came about. */
+export function asPrinted(reading: Reading): Reading {
+  return { ...reading, labels: reading.labels.map((label) => ({ ...label, state: 'accepted', certainty: null, others: [] })) };
 }
 
 /** What an assignment lets a student change. */
@@ -27,7 +32,7 @@ export interface AnswerRules {
 export function checkAnswer(change: Change, rules: AnswerRules): string[] {
   const { before, after } = change.labels;
   const faults: string[] = [];
-  if (after.some((l) => l.state !== 'changed' || l.certainty !== null || l.others.length > 0)) faults.push('An answer is not a proposal.');
+  if (after.some((l) => l.state === 'suggested' || l.certainty !== null || l.others.length > 0)) faults.push('An answer is not a proposal.');
   if (rules.keysGiven && changesKeys(change)) faults.push('The keys are given in this assignment.');
   if (!rules.spansGiven) return faults;
   if (before.length !== after.length || !after.every((l) => before.some((b) => sameSpan(b, l)))) faults.push('The spans are given in this assignment.');

@@ -1,0 +1,130 @@
+import { tonicOf } from './key-terms';
+import { type Material } from './material';
+import { BINS, BIN_SHIFT as SHIFT } from './slices';
+import { TEMPLATES } from './templates';
+import {
+  LABELS,
+  LABEL_CLASS as CLASSES,
+  LABEL_CLASSES,
+  LABEL_COUNT,
+  LABEL_KIND,
+  LABEL_TONICISED as TONICISED,
+  LABEL_TONICISED_MODE as TONICISED_MODE,
+} from './vocabulary';
+import { AT as BLOCKS, type Weights, inversionSlot } from './weights';
+
+const AT = BLOCKS;
+const BIN_SHIFT = SHIFT;
+const LABEL_CLASS = CLASSES;
+const LABEL_TONICISED = TONICISED;
+const LABEL_TONICISED_MODE = TONICISED_MODE;
+const TONIC_CLASS = LABEL_CLASSES.indexOf('tonic');
+const FIRST_APPLIED = LABEL_CLASSES.indexOf('applied-dominant');
+const LAST_APPLIED = LABEL_CLASSES.indexOf('applied-other');
+const FIRST_CHROMATIC = LABEL_CLASSES.indexOf('augmented-sixth');
+
+/** Receives the amount of a weight's term. */
+export type TermSink = (weight: number, amount: number) => void;
+
+/** 1 for places in the scale of a mode, `[mode · 128 + relative + 64]`; minor has both forms of its sixth and seventh. */
+const IN_SCALE = new Uint8Array(256);
+for (let place = -1; place <= 5; place++) IN_SCALE[place + 64] = 1;
+for (const place of [-4, -3, -2, -1, 0, 1, 2, 3, 5]) IN_SCALE[128 + place + 64] = 1;
+
+/**
+ * The terms of a label over a segment beyond those of its chord and key: frequencies, scale, metre, opening and close.
+ * What does not depend on the segment is summed once per label and inversion (`base`).
+ */
+export class NodeTerms {
+  private readonly isTone = new Uint8Array(BINS + 64);
+  private readonly base = new Float64Array(LABEL_COUNT * 4).fill(NaN);
+  private readonly tones = TEMPLATES.map((template) => template.tones);
+  private plain = 0;
+  private moving = 0;
+
+  constructor(
+    private readonly material: Material,
+    private readonly weights: Weights,
+  ) {}
+
+  /** The part of a label's score that is quick to know; the rest (scaleScore) is never above 0 for sensible weights. */
+  quickScore(level: number, label: number, inversion: number): number {
+    const slot = label * 4 + inversion;
+    if (Number.isNaN(this.base[slot]!)) {
+      let sum = 0;
+      this.readBase(label, inversion, (weight, amount) => {
+        sum += this.weights.values[weight]! * amount;
+      });
+      this.base[slot] = sum;
+    }
+    return this.base[slot]! + this.weights.values[AT.classLevel + LABEL_CLASS[label]! * 5 + level]!;
+  }
+
+  edgeScore(s: number, key: number, label: number): number {
+    const { segments, slices } = this.material;
+    if (segments.start[s] !== 0 && segments.end[s] !== slices.count) return 0;
+    let sum = 0;
+    this.readEdges(s, key, label, (weight, amount) => {
+      sum += this.weights.values[weight]! * amount;
+    });
+    return sum;
+  }
+
+  scaleScore(s: number, c: number, key: number, label: number): number {
+    this.measureScale(s, c, key, label);
+    return this.plain * this.weights.values[AT.label + 2]! + this.moving * this.weights.values[AT.label + 3]!;
+  }
+
+  readLabel(s: number, c: number, key: number, label: number, sink: TermSink): void {
+    this.readBase(label, this.material.inversion[c]!, sink);
+    sink(AT.classLevel + LABEL_CLASS[label]! * 5 + this.material.slices.level[this.material.segments.start[s]!]!, 1);
+    this.readEdges(s, key, label, sink);
+    this.measureScale(s, c, key, label);
+    if (this.plain > 0) sink(AT.label + 2, this.plain);
+    if (this.moving > 0) sink(AT.label + 3, this.moving);
+  }
+
+  private readBase(label: number, inversion: number, sink: TermSink): void {
+    const { tables } = this.weights;
+    const cls = LABELS[label]!.labelClass;
+    sink(AT.label, tables.label[label]!);
+    sink(AT.label + 1, tables.inversion[label * 4 + inversion]!);
+    sink(AT.perLabel + label, 1);
+    sink(AT.inversion + inversionSlot(label, this.tones[LABEL_KIND[label]!]!.length > 3, inversion), 1);
+    if (cls >= FIRST_APPLIED && cls <= LAST_APPLIED) sink(AT.label + 4, 1);
+    else if (cls >= FIRST_CHROMATIC) sink(AT.label + 5, 1);
+  }
+
+  private readEdges(s: number, key: number, label: number, sink: TermSink): void {
+    const { segments, slices, evidence } = this.material;
+    const home = evidence.home.home;
+    const isTonic = LABEL_CLASS[label] === TONIC_CLASS;
+    if (segments.start[s] === 0) {
+      if (isTonic) sink(AT.label + 6, 1);
+      if (key === home) sink(AT.label + 8, 1);
+    }
+    if (segments.end[s] === slices.count) {
+      if (isTonic) sink(AT.label + 7, 1);
+      if (key === home) sink(AT.label + 9, 1);
+    }
+  }
+
+  /** Notes foreign to both the chord and the scale of the key that the chord is heard in. */
+  private measureScale(s: number, c: number, key: number, label: number): void {
+    const { soundFrom, soundBin, soundPlain, soundMoving, root, kind } = this.material;
+    const tonic = tonicOf(key) + LABEL_TONICISED[label]! + BIN_SHIFT;
+    const scale = LABEL_TONICISED_MODE[label]! * 128 + 64 - tonic;
+    const tones = this.tones[kind[c]!]!;
+    const base = root[c]! + 32;
+    this.plain = 0;
+    this.moving = 0;
+    for (let t = 0; t < tones.length; t++) this.isTone[base + tones[t]!] = 1;
+    for (let p = soundFrom[s]!; p < soundFrom[s + 1]!; p++) {
+      const bin = soundBin[p]!;
+      if (this.isTone[bin + 32] === 1 || IN_SCALE[scale + bin] === 1) continue;
+      this.plain += soundPlain[p]!;
+      this.moving += soundMoving[p]!;
+    }
+    for (let t = 0; t < tones.length; t++) this.isTone[base + tones[t]!] = 0;
+  }
+}

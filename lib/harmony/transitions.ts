@@ -1,0 +1,285 @@
+import { bassMotionOf } from './bass-motion';
+import { KEY_COUNT, modeOf, tonicOf } from './key-terms';
+import { CHORD_SPAN, keyOfState, inversionOfState, labelOfState } from './lattice';
+import { type Material } from './material';
+import { type TermSink } from './node-terms';
+import { relationOf, signatureDistance } from './relation';
+import { DOMINANT_SEVENTH, KIND_COUNT, MAJOR, TEMPLATES } from './templates';
+import { TRANSITION_AT } from './transition-terms';
+import {
+  LABELS,
+  LABEL_CLASS as CLASSES,
+  LABEL_CLASSES,
+  LABEL_KIND as LABEL_KINDS,
+  LABEL_ROOT as ROOTS,
+  LABEL_ROW,
+  ROW_COUNT,
+  findLabels,
+} from './vocabulary';
+import { AT, type Tables, type Weights } from './weights';
+
+const T = Object.fromEntries(Object.entries(TRANSITION_AT).map(([name, at]) => [name, AT.transition + at])) as Readonly<Record<string, number>>;
+const PROGRESSION = T['progression-frequency']!;
+const SAME_AGAIN = T['same-again']!;
+const NEW_INVERSION = T['new-inversion']!;
+const SEVENTH_ADDED = T['seventh-added']!;
+const SEVENTH_DROPPED = T['seventh-dropped']!;
+const RESOLVES = T['applied-resolves']!;
+const RESOLVES_OTHER_MODE = T['applied-resolves-other-mode']!;
+const GOES_ON = T['applied-goes-on']!;
+const ELSEWHERE = T['applied-elsewhere']!;
+const SIX_FOUR_RESOLVES = T['six-four-resolves']!;
+const SIX_FOUR_ELSEWHERE = T['six-four-elsewhere']!;
+const KEY_CHANGE = T['key-change']!;
+const RELATION = T['relation-frequency']!;
+const DISTANCE = T['key-distance']!;
+const PIVOT = T['pivot-frequency']!;
+const PIVOT_PROGRESSION = T['pivot-progression']!;
+const NO_PIVOT = T['no-pivot']!;
+const ON_DOWNBEAT = T['change-on-downbeat']!;
+const WITH_SIGNATURE = T['change-with-signature']!;
+const MODE_ONLY = T['change-mode-only']!;
+const MOTION = T['bass-no step']!;
+const LEAVES = T[`change-leaves-${LABEL_CLASSES[0]}`]!;
+const ARRIVES = T[`change-arrives-${LABEL_CLASSES[0]}`]!;
+const PROGRESSION_DELTA = AT.progression;
+
+/** A transition that cannot be: the same label twice inside a bar. */
+export const IMPOSSIBLE = -Infinity;
+
+const ROOT_RANGE = 48;
+const CHORDS = CHORD_SPAN;
+const KEYS = KEY_COUNT;
+const ROWS = ROW_COUNT;
+const LABEL_ROOT = ROOTS;
+const LABEL_KIND = LABEL_KINDS;
+const LABEL_CLASS = CLASSES;
+const IS_SIX_FOUR = Uint8Array.from(LABELS, (label) => (label.sixFour ? 1 : 0));
+/** Bass tone of a chord (label · 4 + inversion) relative to the tonic. */
+const BASS = new Int8Array(LABELS.length * 4);
+for (const label of LABELS) TEMPLATES[label.kind]!.tones.forEach((tone, i) => (BASS[label.id * 4 + i] = label.root + tone));
+
+/**
+ * The terms between neighbouring labels. `j` is the boundary between them (index of the slice that the next begins with).
+ * `read` says every term; `score` is their weighted sum, the parts that recur summed once per pair of chords or of keys.
+ */
+export class Transitions {
+  private readonly row: Int16Array;
+  private readonly bass: Int8Array;
+  private readonly pivot: Int16Array;
+  private readonly pairs = new PairSums();
+  private readonly changes = new Float64Array(KEYS * KEYS).fill(NaN);
+
+  constructor(
+    private readonly material: Material,
+    private readonly weights: Weights,
+  ) {
+    this.row = LABEL_ROW;
+    this.bass = BASS;
+    this.pivot = commonestLabels(weights.tables);
+  }
+
+  /** Whether a boundary lies inside a bar: there the same label cannot follow itself. */
+  isWithinBar(j: number): boolean {
+    return this.material.slices.bar[j] === this.material.slices.bar[j - 1];
+  }
+
+  /** Two labels in one key, not the same chord; `from` and `to` are chords (label · 4 + inversion). */
+  scoreInKey(fromState: number, toState: number, from: number, to: number, j: number): number {
+    const slot = this.pairs.findSlot(from * CHORDS + to);
+    const known = this.pairs.sum[slot]!;
+    if (known === known) return known;
+    const sum = this.sum(fromState, toState, j);
+    this.pairs.put(slot, from * CHORDS + to, sum);
+    return sum;
+  }
+
+  /** Two labels in different keys. */
+  scoreChange(fromState: number, toState: number, fromKey: number, toKey: number, j: number): number {
+    const { values, tables } = this.weights;
+    const from = fromState - fromKey * CHORDS;
+    const to = toState - toKey * CHORDS;
+    const a = from >> 2;
+    const b = to >> 2;
+    const shift = (toKey >> 1) - (fromKey >> 1);
+    let sum = this.scoreKeys(fromKey, toKey) + values[MOTION + bassMotionOf(this.bass[to]! + shift - this.bass[from]!)]!;
+    sum += values[LEAVES + LABEL_CLASS[a]!]! + values[ARRIVES + LABEL_CLASS[b]!]!;
+    const { slices, evidence } = this.material;
+    if (slices.level[j] === 0) sum += values[ON_DOWNBEAT]!;
+    if (evidence.home.signature[j] !== evidence.home.signature[j - 1]) sum += values[WITH_SIGNATURE]!;
+    const root = LABEL_ROOT[a]! - shift;
+    const within = root >= -ROOT_RANGE / 2 && root < ROOT_RANGE / 2;
+    const label = within ? this.pivot[pivotSlot(toKey & 1, root, LABEL_KIND[a]!, IS_SIX_FOUR[a] === 1)]! : -1;
+    if (label < 0) return sum + values[NO_PIVOT]!;
+    sum += values[PIVOT]! * tables.label[label]!;
+    return label === b ? sum : sum + values[PIVOT_PROGRESSION]! * tables.progression[this.row[label]! * ROWS + this.row[b]!]!;
+  }
+
+  private scoreKeys(from: number, to: number): number {
+    const known = this.changes[from * KEYS + to]!;
+    if (known === known) return known;
+    let sum = 0;
+    this.readKeys(from, to, (weight, amount) => {
+      sum += this.weights.values[weight]! * amount;
+    });
+    return (this.changes[from * KEYS + to] = sum);
+  }
+
+  /** The weighted sum of all that `read` says; IMPOSSIBLE when it cannot be. */
+  score(from: number, to: number, j: number): number {
+    return from === to && this.isWithinBar(j) ? IMPOSSIBLE : this.sum(from, to, j);
+  }
+
+  private sum(from: number, to: number, j: number): number {
+    let sum = 0;
+    this.read(from, to, j, (weight, amount) => {
+      sum += this.weights.values[weight]! * amount;
+    });
+    return sum;
+  }
+
+  /** Gives every term of the transition to `sink`; false when it cannot be. */
+  read(from: number, to: number, j: number, sink: TermSink): boolean {
+    const fromKey = keyOfState(from);
+    const toKey = keyOfState(to);
+    if (from === to) {
+      if (this.isWithinBar(j)) return false;
+      sink(SAME_AGAIN, 1);
+      return true;
+    }
+    const bass = (this.bass[(labelOfState(to) << 2) + inversionOfState(to)]! + tonicOf(toKey)) - (this.bass[(labelOfState(from) << 2) + inversionOfState(from)]! + tonicOf(fromKey));
+    sink(MOTION + bassMotionOf(bass), 1);
+    if (fromKey === toKey) this.readProgression(labelOfState(from), labelOfState(to), sink);
+    else this.readKeyChange(from, to, j, sink);
+    return true;
+  }
+
+  private readProgression(from: number, to: number, sink: TermSink): void {
+    if (from === to) {
+      sink(NEW_INVERSION, 1);
+      return;
+    }
+    const cell = this.row[from]! * ROW_COUNT + this.row[to]!;
+    sink(PROGRESSION, this.weights.tables.progression[cell]!);
+    sink(PROGRESSION_DELTA + cell, 1);
+    const a = LABELS[from]!;
+    const b = LABELS[to]!;
+    if (a.root === b.root && a.target === b.target) this.readSeventh(a.kind, b.kind, sink);
+    if (a.target) this.readApplied(from, to, sink);
+    if (a.sixFour && !a.target && a.root === 0) {
+      const resolves = b.root === 1 && !b.sixFour && (b.kind === MAJOR || b.kind === DOMINANT_SEVENTH);
+      sink(resolves ? SIX_FOUR_RESOLVES : SIX_FOUR_ELSEWHERE, 1);
+    }
+  }
+
+  private readSeventh(from: number, to: number, sink: TermSink): void {
+    const added = TEMPLATES[to]!.tones.length - TEMPLATES[from]!.tones.length;
+    if (added > 0) sink(SEVENTH_ADDED, 1);
+    else if (added < 0) sink(SEVENTH_DROPPED, 1);
+  }
+
+  private readApplied(from: number, to: number, sink: TermSink): void {
+    const target = LABELS[from]!.target!;
+    const next = LABELS[to]!;
+    if (next.target && next.target.offset === target.offset) {
+      sink(GOES_ON, 1);
+    } else if (next.root === target.offset && !next.target) {
+      const third = TEMPLATES[next.kind]!.tones[1];
+      const mode = third === 4 ? 'major' : 'minor';
+      sink(mode === target.mode ? RESOLVES : RESOLVES_OTHER_MODE, 1);
+    } else {
+      sink(ELSEWHERE, 1);
+    }
+  }
+
+  private readKeyChange(from: number, to: number, j: number, sink: TermSink): void {
+    const fromKey = keyOfState(from);
+    const toKey = keyOfState(to);
+    const { slices, evidence } = this.material;
+    const a = LABELS[labelOfState(from)]!;
+    const b = LABELS[labelOfState(to)]!;
+    this.readKeys(fromKey, toKey, sink);
+    sink(LEAVES + a.labelClass, 1);
+    sink(ARRIVES + b.labelClass, 1);
+    if (slices.level[j] === 0) sink(ON_DOWNBEAT, 1);
+    if (evidence.home.signature[j] !== evidence.home.signature[j - 1]) sink(WITH_SIGNATURE, 1);
+    this.readPivot(a.root + tonicOf(fromKey) - tonicOf(toKey), a.kind, a.sixFour, modeOf(toKey), b.id, sink);
+  }
+
+  private readKeys(from: number, to: number, sink: TermSink): void {
+    const relation = relationOf(from, to);
+    sink(KEY_CHANGE, 1);
+    sink(RELATION, this.weights.tables.relation[relation]!);
+    sink(AT.relation + relation, 1);
+    sink(DISTANCE, Math.min(6, signatureDistance(from, to)));
+    if (tonicOf(from) === tonicOf(to)) sink(MODE_ONLY, 1);
+  }
+
+  /** The chord before, as it would be heard in the new key. */
+  private readPivot(root: number, kind: number, sixFour: boolean, mode: number, next: number, sink: TermSink): void {
+    const { tables } = this.weights;
+    const within = root >= -ROOT_RANGE / 2 && root < ROOT_RANGE / 2;
+    const label = within ? this.pivot[pivotSlot(mode, root, kind, sixFour)]! : -1;
+    if (label < 0) {
+      sink(NO_PIVOT, 1);
+      return;
+    }
+    sink(PIVOT, tables.label[label]!);
+    if (label !== next) sink(PIVOT_PROGRESSION, tables.progression[this.row[label]! * ROW_COUNT + this.row[next]!]!);
+  }
+}
+
+function pivotSlot(mode: number, root: number, kind: number, sixFour: boolean): number {
+  return ((mode * ROOT_RANGE + root + ROOT_RANGE / 2) * KIND_COUNT + kind) * 2 + (sixFour ? 1 : 0);
+}
+
+/** The commonest label of every chord in either mode, −1 where a chord has none. */
+function commonestLabels(tables: Tables): Int16Array {
+  const best = new Int16Array(2 * ROOT_RANGE * KIND_COUNT * 2).fill(-1);
+  for (let mode = 0; mode < 2; mode++) {
+    for (let root = -ROOT_RANGE / 2; root < ROOT_RANGE / 2; root++) {
+      for (let kind = 0; kind < KIND_COUNT; kind++) {
+        for (const sixFour of [false, true]) {
+          for (const label of findLabels(mode, root, kind, sixFour)) {
+            const slot = pivotSlot(mode, root, kind, sixFour);
+            if (best[slot]! < 0 || tables.label[label]! > tables.label[best[slot]!]!) best[slot] = label;
+          }
+        }
+      }
+    }
+  }
+  return best;
+}
+
+/** Sums per pair of chords: an open table of powers of two, doubled when half full. */
+class PairSums {
+  private pair = new Int32Array(1 << 14).fill(-1);
+  sum = new Float64Array(1 << 14).fill(NaN);
+  private used = 0;
+
+  /** Where a pair stands, or where it would (its sum is NaN then). */
+  findSlot(pair: number): number {
+    const mask = this.pair.length - 1;
+    let slot = Math.imul(pair, 0x9e3779b1) >>> 8 & mask;
+    while (this.pair[slot] !== pair && this.pair[slot] !== -1) slot = (slot + 1) & mask;
+    return slot;
+  }
+
+  put(slot: number, pair: number, sum: number): void {
+    this.pair[slot] = pair;
+    this.sum[slot] = sum;
+    if (++this.used * 2 > this.pair.length) this.enlarge();
+  }
+
+  private enlarge(): void {
+    const { pair, sum } = this;
+    this.pair = new Int32Array(pair.length * 2).fill(-1);
+    this.sum = new Float64Array(pair.length * 2).fill(NaN);
+    for (let i = 0; i < pair.length; i++) {
+      if (pair[i] === -1) continue;
+      const slot = this.findSlot(pair[i]!);
+      this.pair[slot] = pair[i]!;
+      this.sum[slot] = sum[i]!;
+    }
+  }
+}
