@@ -2,6 +2,7 @@ import type { ReactNode } from 'react';
 import type { LabelMark } from '@/components/score/lanes';
 import type { Label, Reading } from '@/lib/harmony/reading';
 import type { ConventionSheet } from '@/lib/theory/conventions';
+import type { SaveState } from './use-saving';
 
 /**
  * `edit`: one's own reading, or one shared for editing. `read`: someone else's. `answer`: a student's work: no proposals,
@@ -30,8 +31,8 @@ export interface DeskRules {
 }
 
 export interface DeskProps {
-  /** The reading's address, `/api/readings/…`: where it is fetched, edited and remarked on. */
-  readonly base: string;
+  /** The reading's address, `/api/readings/…`: where it is fetched, edited and remarked on. Null: a desk to try, nothing is kept. */
+  readonly base: string | null;
   readonly mode: DeskMode;
   /** Who is at the desk: edits that could not be sent are kept under this id. */
   readonly userId: string;
@@ -54,6 +55,8 @@ export interface DeskProps {
   readonly openAt?: number;
   /** Told after every change of the reading: how many labels are settled. */
   onProgress?(settled: number, labels: number): void;
+  /** Told how saving stands: whether the server has all that is on the page. */
+  onSaving?(state: SaveState): void;
 }
 
 export interface Powers {

@@ -236,3 +236,10 @@ export async function unsafeGetKeySignature(db: Db, scoreId: string): Promise<nu
   const [row] = await db.select({ keyFifths: scores.keyFifths }).from(scores).where(eq(scores.id, scoreId));
   return row?.keyFifths ?? 0;
 }
+
+/** An excerpt's bars as places in its score, both ends included; the caller may see the excerpt. */
+export async function findExcerptBars(db: Db, excerptId: string): Promise<{ readonly firstBar: number; readonly lastBar: number }> {
+  const [row] = await db.select({ firstBar: excerpts.firstBar, lastBar: excerpts.lastBar }).from(excerpts).where(eq(excerpts.id, excerptId));
+  if (!row) throw new Error('an assignment has an excerpt');
+  return row;
+}

@@ -42,8 +42,6 @@ export interface Rubric {
     /** V6/4 counts only when the answer's next label is the dominant it resolves to. */
     readonly tiedToNext: boolean;
   };
-  /** A repeated numeral may be given by its figures alone: after V, `6/5` is V6/5. */
-  readonly figuresOnly: boolean;
   /** In open segmentation, how far off a change may be, in quarter notes. */
   readonly boundaryTolerance: number;
 }
@@ -62,7 +60,6 @@ const EVERY_PART: Rubric = {
   frameCredit: 1,
   followThrough: true,
   sixFour: { asTonic: true, asDominant: true, tiedToNext: true },
-  figuresOnly: true,
   boundaryTolerance: 0,
 };
 

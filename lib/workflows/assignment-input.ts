@@ -24,7 +24,6 @@ export const rubricInput = z.object({
   frameCredit: credit,
   followThrough: z.boolean(),
   sixFour: z.object({ asTonic: z.boolean(), asDominant: z.boolean(), tiedToNext: z.boolean() }),
-  figuresOnly: z.boolean(),
   boundaryTolerance: z.number('Write a number.').min(0, 'Not below 0.').max(8, 'At most 8 quarters.'),
 }) satisfies z.ZodType<Rubric>;
 
@@ -40,9 +39,9 @@ export const framedInput = z.object({
     degree,
     quality: z.enum(QUALITIES),
     inversion: z.literal([0, 1, 2, 3, 4]),
-    applied: z.array(z.object({ degree, mode: z.enum(MODES) })).max(6),
+    applied: z.array(z.object({ degree, mode: z.enum(MODES) })).max(6).readonly(),
     special: z.enum(SPECIALS).nullable(),
-    added: z.array(z.enum(ADDED_TONES)).max(5),
+    added: z.array(z.enum(ADDED_TONES)).max(5).readonly(),
   }),
 });
 

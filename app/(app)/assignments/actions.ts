@@ -25,7 +25,7 @@ export const createAssignment = formAction(
     name: 'assignments.create',
     can: isStaff,
     input: createAssignmentInput,
-    redirectTo: ({ assignmentId }) => `/assignments/${assignmentId}`,
+    revalidate: ({ courseId }) => [`/courses/${courseId}`],
   },
   createAssignmentWorkflow,
 );
@@ -36,6 +36,6 @@ export const drop = action({ name: 'assignments.drop_alternative', input: dropAl
 export const open = action({ name: 'assignments.open', input: assignmentInput, ...prepare }, openAssignment);
 export const close = action({ name: 'assignments.close', input: assignmentInput, ...prepare }, closeAssignment);
 export const remove = action(
-  { name: 'assignments.delete', can: isStaff, input: assignmentInput, redirectTo: ({ courseId }) => `/courses/${courseId}` },
+  { name: 'assignments.delete', can: isStaff, input: assignmentInput, revalidate: ({ courseId }) => [`/courses/${courseId}`] },
   deleteAssignment,
 );

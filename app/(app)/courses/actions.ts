@@ -24,7 +24,7 @@ const inCourse = {
 };
 
 export const create = formAction(
-  { name: 'courses.create', can: canCreateCourse, input: courseWords, redirectTo: ({ courseId }) => `/courses/${courseId}` },
+  { name: 'courses.create', can: canCreateCourse, input: courseWords, revalidate: () => ['/courses'] },
   createCourse,
 );
 export const join = formAction({ name: 'courses.join', can: canJoinCourse, input: joinCourseInput, revalidate: () => ['/courses'] }, joinCourse);

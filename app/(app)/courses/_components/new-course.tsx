@@ -1,5 +1,6 @@
 'use client';
 
+import { useRouter } from 'next/navigation';
 import { useState } from 'react';
 import { useSubmit } from '@/app/_components/use-submit';
 import { Button, Dialog, DialogActions, ErrorNote } from '@/components/ui';
@@ -7,8 +8,9 @@ import { create } from '../actions';
 import { CourseFields } from './course-fields';
 
 export function NewCourse() {
+  const router = useRouter();
   const [open, setOpen] = useState(false);
-  const { busy, fields, failure, onSubmit } = useSubmit(create);
+  const { busy, fields, failure, onSubmit } = useSubmit(create, ({ courseId }) => router.push(`/courses/${courseId}`));
   return (
     <>
       <Button kind="primary" onClick={() => setOpen(true)}>New course</Button>

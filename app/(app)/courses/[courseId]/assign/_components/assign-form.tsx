@@ -1,5 +1,6 @@
 'use client';
 
+import { useRouter } from 'next/navigation';
 import { useMemo, useState } from 'react';
 import { useSubmit } from '@/app/_components/use-submit';
 import { Button, Choices, EmptyState, ErrorNote, Field, Input, Radio } from '@/components/ui';
@@ -18,10 +19,11 @@ interface AssignFormProps {
 
 /** An excerpt, a reading of it to mark against, a title. */
 export function AssignForm({ courseId, readings, excerptId }: AssignFormProps) {
+  const router = useRouter();
   const excerpts = useMemo(() => excerptsOf(readings), [readings]);
   const [chosen, setChosen] = useState(excerpts.find((one) => one.excerptId === excerptId)?.excerptId ?? '');
   const [typed, setTyped] = useState<string | null>(null);
-  const { busy, fields, failure, onSubmit } = useSubmit(createAssignment);
+  const { busy, fields, failure, onSubmit } = useSubmit(createAssignment, ({ assignmentId }) => router.push(`/assignments/${assignmentId}`));
   const excerpt = excerpts.find((one) => one.excerptId === chosen);
   const title = typed ?? excerpt?.excerptTitle ?? '';
   return (

@@ -1,0 +1,1 @@
+export { CourseTabs as AssignmentTabs } from '../../../courses/[courseId]/_components/course-tabs';
