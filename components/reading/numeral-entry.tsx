@@ -46,7 +46,7 @@ export function NumeralEntry({ label, score, sheet, typed, onWrite, onCancel, co
   };
 
   return (
-    <div className="flex w-[19rem] flex-col border border-ink bg-sheet text-base text-ink">
+    <div ref={bringIntoView} className="flex w-[19rem] max-w-[92vw] flex-col border border-ink bg-sheet text-base text-ink">
       <input
         ref={input}
         // The person has just asked to write here.
@@ -73,6 +73,11 @@ export function NumeralEntry({ label, score, sheet, typed, onWrite, onCancel, co
       </div>
     </div>
   );
+}
+
+/** What is typed into must be seen whole. */
+function bringIntoView(box: HTMLElement | null): void {
+  box?.scrollIntoView({ block: 'nearest', inline: 'nearest' });
 }
 
 type MeaningProps = Pick<NumeralEntryProps, 'label' | 'score' | 'sheet' | 'compares'> & { readonly written: Written };

@@ -86,9 +86,13 @@ function position(geometry: SheetGeometry, { placed, system }: PlacedLabel): { l
 function EntryPlace({ geometry, placed, children }: { geometry: SheetGeometry; placed: PlacedLabel | undefined; children: ReactNode }) {
   if (!children || !placed) return null;
   const { left, top } = position(geometry, placed);
+  const fromRight = left > geometry.width / 2;
+  const place = fromRight ? { right: geometry.width - left - 40 } : { left };
   return (
-    <div className="absolute z-20" style={{ left, top: top - 6 }}>
-      <div className="w-max origin-top-left" style={{ transform: 'scale(calc(1 / var(--sheet-scale, 1)))' }}>{children}</div>
+    <div className="entry-place absolute z-20" style={{ ...place, top: top + NUMERAL_LINE.rowHeight }}>
+      <div className={fromRight ? 'w-max origin-top-right' : 'w-max origin-top-left'} style={{ transform: 'scale(calc(1 / var(--sheet-scale, 1)))' }}>
+        {children}
+      </div>
     </div>
   );
 }
@@ -139,8 +143,8 @@ const LabelView = memo(function LabelView(props: LabelViewProps) {
 function StateOf({ given, mark }: { readonly given: boolean; readonly mark: LabelMark }) {
   if (given) return null;
   return (
-    <span aria-hidden="true" className={classNames('absolute top-[26px] left-px flex items-center gap-0.5 text-[10px] leading-none whitespace-nowrap', TONE_TEXT[mark.tone])}>
-      <ShapeIcon shape={mark.shape} className="size-[9px]!" />
+    <span aria-hidden="true" className={classNames('absolute top-[25px] left-px flex items-center gap-0.5 text-[13px] leading-none whitespace-nowrap', TONE_TEXT[mark.tone])}>
+      <ShapeIcon shape={mark.shape} className="size-[11px]!" />
       {mark.note}
     </span>
   );

@@ -20,12 +20,13 @@ export interface ScoreViewProps {
   readonly zoom: number;
   /** A moment whose sheet stays engraved wherever the region is scrolled. */
   readonly heldTick: number;
-  /** Drawn over an engraved sheet, in its coordinates. */
+  /** Drawn under and over an engraved sheet, in its coordinates. */
+  underlay(geometry: SheetGeometry): ReactNode;
   overlay(geometry: SheetGeometry): ReactNode;
 }
 
 /** The score with room for lanes of ours under each system: sheets one below the other, scaled, each with its overlay. */
-export function ScoreView({ xml, score, firstBar, lastBar, zoom, heldTick, overlay }: ScoreViewProps) {
+export function ScoreView({ xml, score, firstBar, lastBar, zoom, heldTick, underlay, overlay }: ScoreViewProps) {
   const region = useRef<HTMLDivElement>(null);
   const { engraved, scale } = useSheetWidth(region, zoom);
   const document = useMemo(() => new DOMParser().parseFromString(xml, 'application/xml'), [xml]);
@@ -49,6 +50,7 @@ export function ScoreView({ xml, score, firstBar, lastBar, zoom, heldTick, overl
           <div key={range.first} data-sheet={index} className="relative" style={{ width: width * scale, height: height * scale }}>
             {near.has(index) && engraved !== null ? (
               <div className="absolute top-0 left-0 origin-top-left" style={{ width, transform: `scale(${scale})`, '--sheet-scale': scale } as CSSProperties}>
+                {geometry ? <div className="absolute inset-0">{underlay(geometry)}</div> : null}
                 <EngravedSheet
                   document={document}
                   score={score}

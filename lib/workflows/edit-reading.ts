@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { isDuplicate } from '@/db/client';
 import { unsafeLoadReadingContent } from '@/db/queries/reading-rows';
 import { type ReadingHead, findAnswerFrame, findReading, lockReading } from '@/db/queries/readings';
 import {
@@ -38,14 +39,22 @@ export type EditReadingInput = z.infer<typeof editReadingInput>;
  * conflict and changes nothing. The answer lists every edit since `baseVersion`, this one included.
  */
 export async function editReading(deps: Deps, actor: Actor, input: EditReadingInput): Promise<Result<ReadingNews, AppError>> {
-  return inTransaction(deps, async (inside) => {
-    if (!(await lockReading(inside.db, actor, input.readingId))) return err(appError('not_found'));
-    const reading = await findReading(inside.db, actor, input.readingId, inside.now());
-    if (!reading) return err(appError('not_found'));
-    if ((await findRevisionVersion(inside.db, reading.id, input.editId)) !== null) return ok(await listNews(inside, reading, input.baseVersion));
-    if (!canEditReading(actor, reading.access)) return err(refusalOf(actor, reading));
-    return makeEdit(inside, actor, reading, input);
-  });
+  try {
+    return await inTransaction(deps, (inside) => editLocked(inside, actor, input));
+  } catch (error) {
+    // An id that some other reading's label or edit bears already.
+    if (isDuplicate(error)) return err(appError('bad_input', 'This edit does not fit this reading.'));
+    throw error;
+  }
+}
+
+async function editLocked(deps: Deps, actor: Actor, input: EditReadingInput): Promise<Result<ReadingNews, AppError>> {
+  if (!(await lockReading(deps.db, actor, input.readingId))) return err(appError('not_found'));
+  const reading = await findReading(deps.db, actor, input.readingId, deps.now());
+  if (!reading) return err(appError('not_found'));
+  if ((await findRevisionVersion(deps.db, reading.id, input.editId)) !== null) return ok(await listNews(deps, reading, input.baseVersion));
+  if (!canEditReading(actor, reading.access)) return err(refusalOf(actor, reading));
+  return makeEdit(deps, actor, reading, input);
 }
 
 /** Who may see a reading but not edit it is told that it is closed; everyone else that there is nothing. */
@@ -60,7 +69,7 @@ async function makeEdit(deps: Deps, actor: Actor, head: ReadingHead, input: Edit
   if (refusal) return err(refusal);
   const applied = applyChange(content, input.change);
   if (!applied.ok) return err(appError('version_conflict'));
-  if (!(await store(deps, actor, head, input, applied.value))) return err(appError('version_conflict'));
+  await store(deps, actor, head, input, applied.value);
   return ok(await listNews(deps, { ...head, version: head.version + 1 }, input.baseVersion));
 }
 
@@ -72,7 +81,7 @@ async function checkFrame(deps: Deps, head: ReadingHead, change: Change): Promis
   return fault ? appError('bad_input', fault) : null;
 }
 
-async function store(deps: Deps, actor: Actor, head: ReadingHead, input: EditReadingInput, after: Reading): Promise<boolean> {
+async function store(deps: Deps, actor: Actor, head: ReadingHead, input: EditReadingInput, after: Reading): Promise<void> {
   const { labels, regions } = input.change;
   const gone = labels.before.filter((b) => !labels.after.some((a) => a.id === b.id)).map((l) => l.id);
   const come = labels.after.filter((a) => !labels.before.some((b) => b.id === a.id)).map((l) => l.id);
@@ -84,7 +93,8 @@ async function store(deps: Deps, actor: Actor, head: ReadingHead, input: EditRea
   await reattachRemarks(deps.db, head.id, come);
   const version = head.version + 1;
   await insertRevision(deps.db, { editId: input.editId, readingId: head.id, version, authorId: actor.userId, ...sides, createdAt: deps.now() });
-  return advanceReading(deps.db, head.id, head.version, isSettled(after) ? 'settled' : 'open');
+  const advanced = await advanceReading(deps.db, head.id, head.version, isSettled(after) ? 'settled' : 'open');
+  if (!advanced) throw new Error('the reading moved on under its lock');
 }
 
 function isSettled(reading: Reading): boolean {

@@ -5,7 +5,7 @@ import { type StoredRevision, unsafeListRevisions } from '@/db/queries/revisions
 import type { Actor } from '@/lib/auth/actor';
 import { isStaff } from '@/lib/auth/permissions';
 import { type AppError, appError } from '@/lib/errors';
-import { asAnswers } from '@/lib/harmony/answers';
+import { asAnswers, asPrinted } from '@/lib/harmony/answers';
 import type { Change } from '@/lib/harmony/edit';
 import type { Reading } from '@/lib/harmony/reading';
 import { type Result, err, ok } from '@/lib/result';
@@ -31,7 +31,8 @@ export async function readReading(deps: Deps, actor: Actor, { readingId }: z.inf
 /** The content of a reading that the actor may see. */
 export async function loadReading(deps: Deps, actor: Actor, head: ReadingHead): Promise<Reading> {
   const reading = readingOf(await unsafeLoadReadingContent(deps.db, head));
-  return head.kind === 'submission' || !isStaff(actor) ? asAnswers(reading) : reading;
+  if (head.kind === 'submission') return asAnswers(reading);
+  return isStaff(actor) ? reading : asPrinted(reading);
 }
 
 /** An edit that was saved, as desks are told of it. */

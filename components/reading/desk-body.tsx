@@ -1,0 +1,110 @@
+'use client';
+
+import { useEffect, useMemo } from 'react';
+import { isSettled } from '@/components/score/label-look';
+import { findBar, namePlace } from '@/components/score/beats';
+import type { Score } from '@/lib/score/score';
+import { DEFAULT_CONVENTIONS } from '@/lib/theory/conventions';
+import { chooseOther, findNextOpen, runCommand } from './commands';
+import { DeskDialogs } from './desk-dialogs';
+import { getSelected } from './desk-state';
+import type { DeskProps } from './desk-types';
+import { Ledger } from './ledger';
+import { Margin, type MarginPage } from './margin';
+import { OthersPanel } from './others-panel';
+import { RemarksPanel } from './remarks-panel';
+import { ScoreRegion } from './score-region';
+import { Toolbar } from './toolbar';
+import { useDesk, useDeskState } from './use-desk';
+import { useRemarks } from './use-remarks';
+import { useSaving } from './use-saving';
+import { useWhy } from './use-why';
+import { WhyPanel } from './why-panel';
+
+interface DeskBodyProps extends DeskProps {
+  readonly xml: string;
+  readonly score: Score;
+}
+
+const WIDE = 1024;
+
+/** The desk with its score read. */
+export function DeskBody(props: DeskBodyProps) {
+  const { score, base, mode, firstBar, lastBar, onProgress, onSaving } = props;
+  const sheet = props.sheet ?? DEFAULT_CONVENTIONS;
+  const [state, dispatch] = useDeskState(props);
+  const desk = useDesk(props, score, typeof window !== 'undefined' && window.innerWidth < WIDE ? 0.7 : 0.8, state, dispatch);
+  const { context } = desk;
+  const saving = useSaving(context.powers.write ? base : null, props.userId, state, dispatch);
+  const remarks = useRemarks(base);
+  const label = getSelected(state);
+  const why = useWhy(context.powers.proposals ? score : null, state.reading, label.id);
+  const bar = findBar(score, label.start);
+  const settled = useMemo(() => state.reading.labels.filter((l) => !desk.isGiven(l) && isSettled(l)).length, [state.reading.labels, desk.isGiven]);
+
+  useEffect(() => onProgress?.(settled, state.reading.labels.length), [onProgress, settled, state.reading.labels.length]);
+
+  useEffect(() => onSaving?.(saving.state), [onSaving, saving.state]);
+
+  const pages: MarginPage[] = [
+    ...(context.powers.proposals
+      ? [
+          { value: 'why', label: 'Why', content: <WhyPanel score={score} label={label} why={why} /> },
+          {
+            value: 'others',
+            label: `Other readings ${label.others.length || ''}`,
+            content: <OthersPanel score={score} label={label} sheet={sheet} onChoose={context.powers.write ? (other) => chooseOther(context, other) : undefined} />,
+          },
+        ]
+      : []),
+    {
+      value: 'remarks',
+      label: `Remarks ${remarks.all.filter((r) => r.labelId === label.id).length || ''}`,
+      content: (
+        <RemarksPanel remarks={remarks} label={label} barIndex={bar?.index ?? 0} place={namePlace(score, label.start)} focusTurn={desk.remarkTurn} onGoTo={(labelId) => dispatch({ kind: 'select', labelId })} />
+      ),
+    },
+  ];
+
+  return (
+    <div className="flex h-full min-h-0 flex-col overflow-hidden">
+      <Toolbar context={context} saving={context.powers.write && base ? saving : null} heading={props.heading} actions={props.actions} zoom={desk.zoom} arrows={desk.arrows} onMargin={() => desk.setMarginOpen(!desk.marginOpen)} />
+      <div className="relative flex min-h-0 flex-1">
+        <ScoreRegion {...props} sheet={sheet} desk={desk} tendencies={desk.arrows && why ? why.tendencyTones : []} />
+        <aside
+          aria-label="Margin"
+          className={
+            desk.marginOpen
+              ? 'absolute inset-x-0 bottom-0 z-20 max-h-[70%] overflow-y-auto border-t-2 border-ink bg-paper lg:static lg:max-h-none lg:w-[22rem] lg:shrink-0 lg:border-t-0 lg:border-l lg:border-rule-strong'
+              : 'hidden w-[22rem] shrink-0 overflow-y-auto border-l border-rule-strong bg-paper lg:block'
+          }
+        >
+          <Margin
+            label={label}
+            place={namePlace(score, label.start)}
+            sheet={sheet}
+            given={desk.isGiven(label)}
+            feedback={mode === 'feedback' ? props.feedback?.[label.id] : undefined}
+            pages={pages}
+            page={desk.page}
+            onPage={desk.setPage}
+            onAccept={context.powers.write && label.state === 'suggested' && label.numeral ? () => runCommand(context, 'accept') : undefined}
+            onClose={() => desk.setMarginOpen(false)}
+          />
+        </aside>
+      </div>
+      <Ledger
+        score={score}
+        firstBar={firstBar}
+        lastBar={lastBar}
+        reading={state.reading}
+        selected={label}
+        isGiven={desk.isGiven}
+        onSelect={(labelId) => dispatch({ kind: 'select', labelId })}
+        onNextOpen={context.powers.write ? () => runCommand(context, findNextOpen(state, context.canWrite) ? 'next-open' : 'last') : undefined}
+      />
+      <DeskDialogs desk={desk} score={score} sheet={sheet} />
+      <p role="status" aria-live="polite" className="sr-only" key={state.said.count}>{state.said.text}</p>
+    </div>
+  );
+}

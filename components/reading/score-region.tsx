@@ -1,0 +1,202 @@
+'use client';
+
+import { type KeyboardEvent, useCallback, useEffect, useMemo, useRef } from 'react';
+import { BoundaryGrip } from '@/components/score/boundary-grip';
+import type { SheetGeometry } from '@/components/score/geometry';
+import { Lanes } from '@/components/score/lanes';
+import { PointerSurface } from '@/components/score/pointer-surface';
+import { ResolutionArrows } from '@/components/score/resolution-arrows';
+import { ScoreView } from '@/components/score/score-view';
+import { SpanWash } from '@/components/score/span-wash';
+import { moveBoundary } from '@/lib/harmony/edit-spans';
+import type { Label, TendencyTone } from '@/lib/harmony/reading';
+import type { Score } from '@/lib/score/score';
+import type { ConventionSheet } from '@/lib/theory/conventions';
+import { COMMANDS, chooseOther, runCommand, splitAt } from './commands';
+import { findSelection, getSelected } from './desk-state';
+import type { DeskProps } from './desk-types';
+import { beginsNumeral, nameKey } from './keymap';
+import { describeLabel } from './label-words';
+import { NumeralEntry } from './numeral-entry';
+import { ScoreTable } from './score-table';
+import { SplitPicker } from './split-picker';
+import type { Desk } from './use-desk';
+import { writeAt } from './written';
+
+interface ScoreRegionProps extends Pick<DeskProps, 'firstBar' | 'lastBar' | 'feedback' | 'rules'> {
+  readonly xml: string;
+  readonly score: Score;
+  readonly sheet: ConventionSheet;
+  readonly desk: Desk;
+  readonly tendencies: readonly TendencyTone[];
+}
+
+/** The score with its lanes; the one place where the desk's keys act. */
+export function ScoreRegion(props: ScoreRegionProps) {
+  const { xml, score, firstBar, lastBar, sheet, desk } = props;
+  const { state } = desk.context;
+  const region = useRef<HTMLDivElement>(null);
+  const label = getSelected(state);
+  useFocusFollows(region, label.id, desk.opened.kind);
+
+  return (
+    <div ref={region} className="min-w-0 flex-1 overflow-auto bg-sheet" data-score-region>
+      <div role="application" aria-label="Score and labels" aria-describedby="desk-keys" onKeyDown={(event) => pressKey(event, desk)}>
+        <p id="desk-keys" className="sr-only">Arrow keys move between labels; type to write one; question mark lists all keys. After the score, the same is given as tables.</p>
+        <ScoreView
+          xml={xml}
+          score={score}
+          firstBar={firstBar}
+          lastBar={lastBar}
+          zoom={desk.zoom}
+          heldTick={label.start}
+          underlay={(geometry) => <Underlay geometry={geometry} desk={desk} />}
+          overlay={(geometry) => <Overlay {...props} geometry={geometry} />}
+        />
+      </div>
+      <details className="border-t border-rule p-4">
+        <summary className="caps text-small text-ink-soft">The score as tables</summary>
+        <ScoreTable score={score} firstBar={firstBar} lastBar={lastBar} reading={state.reading} sheet={sheet} />
+      </details>
+    </div>
+  );
+}
+
+/** Keeps the keyboard on the selected label, once it is in the region. */
+function useFocusFollows(region: { readonly current: HTMLElement | null }, labelId: string, opened: string): void {
+  const before = useRef({ labelId, opened });
+  useEffect(() => {
+    const moved = before.current.labelId !== labelId || (before.current.opened !== 'none' && opened === 'none');
+    before.current = { labelId, opened };
+    if (!moved || opened !== 'none') return;
+    const target = region.current?.querySelector<HTMLElement>(`[data-label="${labelId}"]`);
+    const active = document.activeElement;
+    const within = active === document.body || region.current?.contains(active);
+    if (within) target?.focus();
+    else target?.scrollIntoView({ block: 'nearest', inline: 'nearest' });
+  });
+}
+
+function pressKey(event: KeyboardEvent, desk: Desk): void {
+  const { context } = desk;
+  if (event.defaultPrevented || (event.target as HTMLElement).closest('button, input, textarea, summary')) return;
+  const key = nameKey(event);
+  const label = getSelected(context.state);
+  const command = COMMANDS.find((c) => c.keys.includes(key));
+  if (command) {
+    event.preventDefault();
+    return runCommand(context, command.id);
+  }
+  if (event.ctrlKey || event.metaKey || event.altKey || !context.powers.write) return;
+  const other = /^[1-9]$/.test(key) && context.powers.proposals ? label.others[Number(key) - 1] : undefined;
+  if (other) {
+    event.preventDefault();
+    return chooseOther(context, other);
+  }
+  if (!beginsNumeral(key)) return;
+  event.preventDefault();
+  if (context.canWrite(label)) context.ui.write(key);
+  else context.dispatch({ kind: 'say', text: 'This label is given and not to be changed.' });
+}
+
+function Underlay({ geometry, desk }: { readonly geometry: SheetGeometry; readonly desk: Desk }) {
+  const chosen = findSelection(desk.context.state);
+  return <SpanWash geometry={geometry} start={chosen[0]?.start ?? 0} end={chosen.at(-1)?.end ?? 0} />;
+}
+
+function Overlay(props: ScoreRegionProps & { readonly geometry: SheetGeometry }) {
+  const { score, sheet, desk, geometry, tendencies, feedback } = props;
+  const { context } = desk;
+  const { state, dispatch, powers } = context;
+  const label = getSelected(state);
+  const selectedIds = useMemo(() => new Set(findSelection(state).map((l) => l.id)), [state]);
+  const givenIds = useMemo(() => new Set(state.reading.labels.filter(desk.isGiven).map((l) => l.id)), [state.reading.labels, desk.isGiven]);
+  const marks = useMemo(() => (feedback ? new Map(Object.entries(feedback)) : undefined), [feedback]);
+  const describe = useCallback((l: Label) => describeLabel(score, l, sheet, desk.isGiven(l)), [score, sheet, desk.isGiven]);
+  const onSelect = useCallback((labelId: string, extend: boolean) => dispatch({ kind: 'select', labelId, extend }), [dispatch]);
+  const { open, noteGeometry } = desk;
+  const onOpen = useCallback(() => powers.write && open({ kind: 'write', typed: null }), [powers.write, open]);
+  useEffect(() => noteGeometry(geometry), [noteGeometry, geometry]);
+
+  const labelAt = (tick: number) => state.reading.labels.findLast((l) => l.start <= tick);
+  return (
+    <>
+      <PointerSurface
+        geometry={geometry}
+        onsets={context.onsets}
+        onPress={(tick, extend) => onSelect(labelAt(tick)?.id ?? '', extend)}
+        onDrag={(tick) => onSelect(labelAt(tick)?.id ?? '', true)}
+      />
+      <ResolutionArrows geometry={geometry} score={score} tones={tendencies} />
+      <Lanes
+        geometry={geometry}
+        reading={state.reading}
+        sheet={sheet}
+        currentId={label.id}
+        selectedIds={selectedIds}
+        givenIds={givenIds}
+        {...(marks ? { marks } : {})}
+        describe={describe}
+        onSelect={onSelect}
+        onOpen={onOpen}
+        onOpenKey={powers.keys ? (start) => {
+          const begun = state.reading.labels.find((l) => l.start >= start);
+          if (begun) onSelect(begun.id, false);
+          desk.open({ kind: 'key' });
+        } : undefined}
+        entry={<Entry score={score} sheet={sheet} desk={desk} />}
+      />
+      {powers.spans ? (
+        <BoundaryGrip
+          geometry={geometry}
+          start={label.start}
+          onsets={context.onsets}
+          onMove={(tick) => dispatch({ kind: 'edit', editId: crypto.randomUUID(), result: moveBoundary(state.reading, label.id, tick), words: 'Moved where the label begins.' })}
+        />
+      ) : null}
+    </>
+  );
+}
+
+/** The line that is typed into, or the choice of where to split. */
+function Entry({ score, sheet, desk }: Pick<ScoreRegionProps, 'score' | 'sheet' | 'desk'>) {
+  const { context, opened, open } = desk;
+  const { state, dispatch } = context;
+  const label = getSelected(state);
+  const close = () => open({ kind: 'none' });
+  if (opened.kind === 'split') {
+    return (
+      <SplitPicker
+        score={score}
+        label={label}
+        onsets={context.onsets}
+        onCancel={close}
+        onSplit={(tick) => {
+          splitAt(context, tick);
+          close();
+        }}
+      />
+    );
+  }
+  if (opened.kind !== 'write') return null;
+  return (
+    <NumeralEntry
+      key={label.id}
+      label={label}
+      score={score}
+      sheet={sheet}
+      typed={opened.typed}
+      compares={context.powers.proposals}
+      onCancel={close}
+      onWrite={(written, onward) => {
+        const { labels } = state.reading;
+        const next = labels[labels.findIndex((l) => l.id === label.id) + (onward || 1)];
+        const result = writeAt(state.reading, label, written);
+        const settled = !result.ok && result.error.kind === 'nothing_changes';
+        if (settled && next) dispatch({ kind: 'select', labelId: next.id });
+        else dispatch({ kind: 'edit', editId: crypto.randomUUID(), result, words: written.numeral ? 'Wrote a numeral.' : 'Left a blank.', ...(next ? { selectId: next.id } : {}) });
+        open(onward !== 0 && next && context.canWrite(next) ? { kind: 'write', typed: null } : { kind: 'none' });
+      }}
+    />
+  );
+}

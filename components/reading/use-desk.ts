@@ -1,0 +1,120 @@
+'use client';
+
+import { type Dispatch, useCallback, useMemo, useReducer, useRef, useState } from 'react';
+import type { SheetGeometry } from '@/components/score/geometry';
+import { placeTick } from '@/components/score/geometry';
+import { onsetsOf } from '@/components/score/beats';
+import type { Label } from '@/lib/harmony/reading';
+import type { Score } from '@/lib/score/score';
+import type { DeskContext } from './commands';
+import { type DeskAction, type DeskState, openDesk, reduceDesk } from './desk-state';
+import { type DeskProps, isGiven, powersOf } from './desk-types';
+
+/** What is open beside or over the score. */
+export type Opened = { readonly kind: 'none' } | { readonly kind: 'write'; readonly typed: string | null } | { readonly kind: 'split' | 'key' | 'help' };
+
+export interface Desk {
+  readonly context: DeskContext;
+  readonly opened: Opened;
+  open(opened: Opened): void;
+  readonly zoom: number;
+  readonly arrows: boolean;
+  readonly page: string;
+  setPage(page: string): void;
+  readonly remarkTurn: number;
+  readonly marginOpen: boolean;
+  setMarginOpen(open: boolean): void;
+  isGiven(label: Label): boolean;
+  /** A sheet was drawn: what stands above and below what is read off it. */
+  noteGeometry(geometry: SheetGeometry): void;
+}
+
+export const ZOOMS = [0.5, 0.6, 0.7, 0.8, 0.9, 1, 1.15, 1.3, 1.5, 1.75, 2] as const;
+
+/** The desk's state and everything its commands need. */
+export function useDesk(props: DeskProps, score: Score, startZoom: number, state: DeskState, dispatch: Dispatch<DeskAction>): Desk {
+  const { mode, rules, reading } = props;
+  const [opened, open] = useState<Opened>({ kind: 'none' });
+  const [zoom, setZoom] = useState(startZoom);
+  const [arrows, setArrows] = useState(true);
+  const [page, setPage] = useState(firstPage(props));
+  const [remarkTurn, setRemarkTurn] = useState(0);
+  const [marginOpen, setMarginOpen] = useState(false);
+  const geometries = useRef(new Map<number, SheetGeometry>());
+  const powers = useMemo(() => powersOf(mode, rules), [mode, rules]);
+  const onsets = useMemo(() => onsetsOf(score, reading.start, reading.end), [score, reading.start, reading.end]);
+  const given = useCallback((label: Label) => isGiven(label, rules), [rules]);
+  const noteGeometry = useCallback((geometry: SheetGeometry) => {
+    const first = geometry.bars[0];
+    if (first) geometries.current.set(first.bar, geometry);
+  }, []);
+
+  const context: DeskContext = {
+    state,
+    dispatch,
+    score,
+    onsets,
+    powers,
+    canWrite: (label) => powers.write && !given(label),
+    neighbourSystem: (labelId, step) => findNeighbour([...geometries.current.values()], state.reading.labels, labelId, step),
+    ui: {
+      write: (typed) => open({ kind: 'write', typed }),
+      chooseKey: () => open({ kind: 'key' }),
+      split: () => open({ kind: 'split' }),
+      help: () => open({ kind: 'help' }),
+      remark: () => {
+        setPage('remarks');
+        setMarginOpen(true);
+        setRemarkTurn((n) => n + 1);
+      },
+      zoom: (step) => setZoom((now) => stepZoom(now, step)),
+      nextTab: () => setPage((now) => nextPage(now, powers.proposals)),
+      toggleArrows: () => setArrows((on) => !on),
+    },
+  };
+  return { context, opened, open, zoom, arrows, page, setPage, remarkTurn, marginOpen, setMarginOpen, isGiven: given, noteGeometry };
+}
+
+export function useDeskState(props: DeskProps): [DeskState, Dispatch<DeskAction>] {
+  return useReducer(reduceDesk, props, ({ reading, version, openAt }) => {
+    const desk = openDesk(reading, version);
+    const opening = reading.labels.findLast((l) => openAt !== undefined && l.start <= openAt);
+    return opening ? { ...desk, selectedId: opening.id } : desk;
+  });
+}
+
+function firstPage({ mode }: DeskProps): string {
+  return mode === 'edit' || mode === 'read' ? 'why' : 'remarks';
+}
+
+function nextPage(now: string, proposals: boolean): string {
+  const pages = proposals ? ['why', 'others', 'remarks'] : ['remarks'];
+  return pages[(pages.indexOf(now) + 1) % pages.length] ?? 'remarks';
+}
+
+function stepZoom(now: number, step: -1 | 1): number {
+  const at = ZOOMS.findIndex((z) => z >= now - 0.001);
+  return ZOOMS[Math.max(0, Math.min(ZOOMS.length - 1, at + step))] ?? now;
+}
+
+interface Spot {
+  readonly label: Label;
+  readonly x: number;
+  /** Sheet and system, counted through. */
+  readonly line: number;
+}
+
+function findNeighbour(sheets: readonly SheetGeometry[], labels: readonly Label[], labelId: string, step: -1 | 1): string | null {
+  const sorted = [...sheets].sort((a, b) => (a.bars[0]?.bar ?? 0) - (b.bars[0]?.bar ?? 0));
+  const spots = labels.flatMap((label): Spot[] => {
+    const sheet = sorted.findIndex((g) => placeTick(g, label.start));
+    const place = sorted[sheet] ? placeTick(sorted[sheet], label.start) : null;
+    return place ? [{ label, x: place.x, line: sheet * 1000 + place.system }] : [];
+  });
+  const here = spots.find((s) => s.label.id === labelId);
+  if (!here) return null;
+  const lines = [...new Set(spots.map((s) => s.line))].sort((a, b) => a - b);
+  const line = lines[lines.indexOf(here.line) + step];
+  const there = spots.filter((s) => s.line === line);
+  return there.reduce<Spot | null>((best, s) => (!best || Math.abs(s.x - here.x) < Math.abs(best.x - here.x) ? s : best), null)?.label.id ?? null;
+}
