@@ -73,21 +73,20 @@ export interface ScannedNumeral {
   readonly targets: readonly TargetHead[];
 }
 
-/** A place in the text and the one way to move it: `take` a pattern (sticky) or stay. */
+/** A place in the text and the one way to move it: `take` a pattern, which must be sticky (flag y), or stay. */
 export class Reader {
   at = 0;
   constructor(readonly text: string) {}
 
   take(pattern: RegExp): RegExpExecArray | null {
-    const sticky = new RegExp(pattern.source, `${pattern.flags.replace(/[gy]/g, '')}y`);
-    sticky.lastIndex = this.at;
-    const match = sticky.exec(this.text);
+    pattern.lastIndex = this.at;
+    const match = pattern.exec(this.text);
     if (match) this.at += match[0].length;
     return match;
   }
 
   skipSpace(): void {
-    this.take(/\s*/);
+    this.take(/\s*/y);
   }
 
   get atEnd(): boolean {
@@ -113,14 +112,14 @@ export function scanNumeral(text: string): Result<ScannedNumeral, NumeralError> 
 }
 
 const NAMES: readonly (readonly [RegExp, ChordName])[] = [
-  [/It(?:alian)?/i, 'It'],
-  [/Fr(?:ench)?/i, 'Fr'],
-  [/G(?:erman|er|r)/i, 'Ger'],
-  [/Sw(?:iss)?/i, 'Sw'],
-  [/N(?:eapolitan)?/, 'N'],
-  [/CT/i, 'CT'],
-  [/Cad\.?/i, 'Cad'],
-  [/Ped(?:al)?\.?/i, 'Ped'],
+  [/It(?:alian)?/iy, 'It'],
+  [/Fr(?:ench)?/iy, 'Fr'],
+  [/G(?:erman|er|r)/iy, 'Ger'],
+  [/Sw(?:iss)?/iy, 'Sw'],
+  [/N(?:eapolitan)?/y, 'N'],
+  [/CT/iy, 'CT'],
+  [/Cad\.?/iy, 'Cad'],
+  [/Ped(?:al)?\.?/iy, 'Ped'],
 ];
 
 function scanHead(reader: Reader): Result<RomanHead | NamedHead, NumeralError> {
@@ -148,9 +147,9 @@ function scanNamed(reader: Reader, name: Token<ChordName>): Result<NamedHead, Nu
 
 function scanRoman(reader: Reader, expected: string): Result<Roman, NumeralError> {
   const at = reader.at;
-  const signs = signsOfText(reader.take(/♮|(?:♭|𝄫|b)+(?=\s*[♭𝄫ivIV])|(?:♯|𝄪|#)+/u)?.[0] ?? '');
+  const signs = signsOfText(reader.take(/♮|(?:♭|𝄫|b)+(?=\s*[♭𝄫ivIV])|(?:♯|𝄪|#)+/uy)?.[0] ?? '');
   reader.skipSpace();
-  const letters = reader.take(/[ivIV]+/)?.[0];
+  const letters = reader.take(/[ivIV]+/y)?.[0];
   const start = reader.at - (letters?.length ?? 0);
   if (!letters) return stopAt(reader.text, reader.at, expected);
   const step = STEPS[ROMANS.findIndex((roman) => roman === letters.toUpperCase())];
@@ -182,12 +181,12 @@ function scanTail(reader: Reader): Result<Tail, NumeralError> {
 }
 
 const MARKS: readonly (readonly [RegExp, ChordMark])[] = [
-  [/ø|Ø|0|half-?\s?dim(?:inished)?/i, 'half-diminished'],
-  [/°|º|˚|dim(?:inished)?|o(?!f)/, 'diminished'],
-  [/\+|aug(?:mented)?/, 'augmented'],
-  [/\?/, 'unstated'],
-  [/M(?!\s*aj)/, 'capital-major'],
-  [/m(?!\s*aj|\s*in)/, 'capital-minor'],
+  [/ø|Ø|0|half-?\s?dim(?:inished)?/iy, 'half-diminished'],
+  [/°|º|˚|dim(?:inished)?|o(?!f)/y, 'diminished'],
+  [/\+|aug(?:mented)?/y, 'augmented'],
+  [/\?/y, 'unstated'],
+  [/M(?!\s*aj)/y, 'capital-major'],
+  [/m(?!\s*aj|\s*in)/y, 'capital-minor'],
 ];
 
 function scanMark(reader: Reader): Token<ChordMark> | null {
@@ -195,8 +194,8 @@ function scanMark(reader: Reader): Token<ChordMark> | null {
 }
 
 const SEVENTH_WORDS: readonly (readonly [RegExp, 'major' | 'minor'])[] = [
-  [/maj|M/, 'major'],
-  [/dom|min/, 'minor'],
+  [/maj|M/y, 'major'],
+  [/dom|min/y, 'minor'],
 ];
 
 function scanSeventhWord(reader: Reader): Token<'major' | 'minor'> | null {
@@ -219,32 +218,32 @@ const FIGURE_SIGNS: Readonly<Record<string, FigureSign>> = { '♭': 'flat', b: '
 /** Figures with or without a slash, a dash or a space between them. */
 function scanFigures(reader: Reader): Figure[] {
   const figures: Figure[] = [];
-  while (reader.take(figures.length > 0 ? /\s*[/\-–]?\s*(?=[♭♯♮b#n]?\d)/u : /\s*(?=[♭♯♮b#n]?\d)/u)) {
+  while (reader.take(figures.length > 0 ? /\s*[/\-–]?\s*(?=[♭♯♮b#n]?\d)/uy : /\s*(?=[♭♯♮b#n]?\d)/uy)) {
     const at = reader.at;
-    const [, sign = '', digit = ''] = reader.take(/([♭♯♮b#n]?)(\d)/u) ?? [];
+    const [, sign = '', digit = ''] = reader.take(/([♭♯♮b#n]?)(\d)/uy) ?? [];
     figures.push({ sign: FIGURE_SIGNS[sign] ?? '', digit, at });
   }
   return figures;
 }
 
 const NOTES: readonly (readonly [RegExp, Note])[] = [
-  [/sus\s?2/, { kind: 'added', tone: 'sus2' }],
-  [/sus\s?4/, { kind: 'added', tone: 'sus4' }],
-  [/add\s?4/, { kind: 'added', tone: 'add4' }],
-  [/add\s?6/, { kind: 'added', tone: 'add6' }],
-  [/add\s?9/, { kind: 'added', tone: 'add9' }],
+  [/sus\s?2/y, { kind: 'added', tone: 'sus2' }],
+  [/sus\s?4/y, { kind: 'added', tone: 'sus4' }],
+  [/add\s?4/y, { kind: 'added', tone: 'add4' }],
+  [/add\s?6/y, { kind: 'added', tone: 'add6' }],
+  [/add\s?9/y, { kind: 'added', tone: 'add9' }],
 ];
 
 const BRACKETED_NOTES: readonly (readonly [RegExp, Note])[] = [
   ...NOTES,
-  [/pass(?:ing)?/, { kind: 'six-four', word: 'pass' }],
-  [/ped(?:al)?/, { kind: 'six-four', word: 'ped' }],
-  [/arp(?:eggiated)?/, { kind: 'six-four', word: 'arp' }],
-  [/plain/, { kind: 'six-four', word: 'plain' }],
-  [/maj(?:or)?/, { kind: 'mode', mode: 'major' }],
-  [/min(?:or)?/, { kind: 'mode', mode: 'minor' }],
-  [/[♭b]9/u, { kind: 'ninth', ninth: 'minor' }],
-  [/[♮n]9/u, { kind: 'ninth', ninth: 'major' }],
+  [/pass(?:ing)?/y, { kind: 'six-four', word: 'pass' }],
+  [/ped(?:al)?/y, { kind: 'six-four', word: 'ped' }],
+  [/arp(?:eggiated)?/y, { kind: 'six-four', word: 'arp' }],
+  [/plain/y, { kind: 'six-four', word: 'plain' }],
+  [/maj(?:or)?/y, { kind: 'mode', mode: 'major' }],
+  [/min(?:or)?/y, { kind: 'mode', mode: 'minor' }],
+  [/[♭b]9/uy, { kind: 'ninth', ninth: 'minor' }],
+  [/[♮n]9/uy, { kind: 'ninth', ninth: 'major' }],
 ];
 
 function scanNotes(reader: Reader): Result<Token<Note>[], NumeralError> {
@@ -252,7 +251,7 @@ function scanNotes(reader: Reader): Result<Token<Note>[], NumeralError> {
   for (;;) {
     const bare = takeFirst(reader, NOTES);
     if (bare) notes.push(bare);
-    else if (reader.take(/\s*[([]/)) {
+    else if (reader.take(/\s*[([]/y)) {
       const inside = scanBracket(reader);
       if (!inside.ok) return inside;
       notes.push(...inside.value);
@@ -266,8 +265,8 @@ function scanBracket(reader: Reader): Result<Token<Note>[], NumeralError> {
     const note = takeFirst(reader, BRACKETED_NOTES);
     if (!note) return stopAt(reader.text, reader.at, STOPPED.inBrackets);
     notes.push(note);
-  } while (reader.take(/\s*,/));
-  if (reader.take(/\s*[)\]]/)) return ok(notes);
+  } while (reader.take(/\s*,/y));
+  if (reader.take(/\s*[)\]]/y)) return ok(notes);
   return stopAt(reader.text, reader.at, STOPPED.openBracket);
 }
 
@@ -276,7 +275,7 @@ function scanTargets(reader: Reader): Result<TargetHead[], NumeralError> {
   for (;;) {
     reader.skipSpace();
     if (reader.atEnd) return ok(targets);
-    if (!reader.take(/\/|of(?![a-z])/)) return stopAt(reader.text, reader.at, expectedAfter(reader.text, reader.at, targets.length > 0));
+    if (!reader.take(/\/|of(?![a-z])/y)) return stopAt(reader.text, reader.at, expectedAfter(reader.text, reader.at, targets.length > 0));
     const target = scanTarget(reader);
     if (!target.ok) return target;
     targets.push(target.value);
@@ -286,13 +285,13 @@ function scanTargets(reader: Reader): Result<TargetHead[], NumeralError> {
 function scanTarget(reader: Reader): Result<TargetHead, NumeralError> {
   reader.skipSpace();
   const at = reader.at;
-  if (reader.take(/N/)) return ok({ at, neapolitan: true });
+  if (reader.take(/N/y)) return ok({ at, neapolitan: true });
   const roman = scanRoman(reader, STOPPED.beforeTarget);
   return roman.ok ? ok({ ...roman.value, mark: scanTargetMark(reader) }) : roman;
 }
 
 function scanTargetMark(reader: Reader): 'capital-major' | 'capital-minor' | null {
-  const mark = reader.take(/[Mm]/)?.[0];
+  const mark = reader.take(/[Mm]/y)?.[0];
   if (!mark) return null;
   return mark === 'M' ? 'capital-major' : 'capital-minor';
 }
