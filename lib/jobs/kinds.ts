@@ -13,8 +13,6 @@ export const JOB_PAYLOADS = {
 export type JobKind = keyof typeof JOB_PAYLOADS;
 export type JobPayload<K extends JobKind> = z.output<(typeof JOB_PAYLOADS)[K]>;
 
-export const JOB_KINDS = Object.keys(JOB_PAYLOADS) as readonly JobKind[];
-
 export function isJobKind(kind: string): kind is JobKind {
   return Object.hasOwn(JOB_PAYLOADS, kind);
 }
