@@ -1,9 +1,9 @@
 import { type Progress, formatBars, progressOfExcerpt } from '@/components/library/excerpt-progress';
-import type { Db } from '@/db/client';
 import { type ExcerptListRow, listExcerptsOfScores, listOpeningKeys, listReadingsOfExcerpts } from '@/db/queries/excerpts';
 import type { Actor } from '@/lib/auth/actor';
 import type { Key } from '@/lib/theory/key';
 import { fifths } from '@/lib/theory/pitch';
+import type { Deps } from '@/lib/workflows/deps';
 
 /** An excerpt as a row of the library. */
 export interface ExcerptEntry {
@@ -22,7 +22,7 @@ export interface ExcerptEntry {
 }
 
 /** The excerpts of some scores by score, each with its key and how far its readings are. */
-export async function listExcerptEntries(db: Db, actor: Actor, scoreIds: readonly string[]): Promise<ReadonlyMap<string, readonly ExcerptEntry[]>> {
+export async function listExcerptEntries(db: Deps['db'], actor: Actor, scoreIds: readonly string[]): Promise<ReadonlyMap<string, readonly ExcerptEntry[]>> {
   const excerpts = await listExcerptsOfScores(db, actor, scoreIds);
   const ids = excerpts.map(({ id }) => id);
   const [readings, keys] = await Promise.all([listReadingsOfExcerpts(db, actor, ids), listOpeningKeys(db, actor, ids)]);

@@ -32,7 +32,7 @@ export default async function ExcerptPage({ params }: ExcerptPageProps) {
   const { actor, excerpt } = await getExcerpt((await params).excerptId);
   const { db } = createDeps();
   const [readings, courses] = await Promise.all([listReadingsOfExcerpts(db, actor, [excerpt.id]), listCourses(db, actor)]);
-  const settable = courses.filter(({ courseRole }) => canPrepareAssignments(actor, courseRole));
+  const settable = courses.filter(({ archivedAt, courseRole }) => archivedAt === null && canPrepareAssignments(actor, courseRole));
   return (
     <div className="sheet pb-16">
       <PageHeader
