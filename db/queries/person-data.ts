@@ -9,6 +9,7 @@ import {
   departmentMembers,
   departments,
   excerpts,
+  handoutPrints,
   keyRegions,
   labels,
   marks,
@@ -63,6 +64,13 @@ export async function listPersonScores(db: Db, { userId, departmentId }: PersonS
     .select({ id: scores.id, title: scores.title, composer: scores.composer, fileName: scores.fileName, createdAt: scores.createdAt })
     .from(scores)
     .where(and(eq(scores.uploadedBy, userId), departmentId ? eq(scores.departmentId, departmentId) : undefined));
+}
+
+export async function listPersonHandouts(db: Db, { userId, departmentId }: PersonScope) {
+  return db
+    .select({ id: handoutPrints.id, options: handoutPrints.options, createdAt: handoutPrints.createdAt })
+    .from(handoutPrints)
+    .where(and(eq(handoutPrints.requestedBy, userId), departmentId ? eq(handoutPrints.departmentId, departmentId) : undefined));
 }
 
 /** The readings the person owns, submissions among them, each with its key regions and labels. */

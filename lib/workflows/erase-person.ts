@@ -4,6 +4,7 @@ import {
   assignments,
   courseMembers,
   departmentMembers,
+  handoutPrints,
   invitations,
   outbox,
   readings,
@@ -44,6 +45,7 @@ async function eraseIdentity(deps: Deps, { userId, email }: { readonly userId: s
   await deps.db.delete(accounts).where(eq(accounts.userId, userId));
   await deps.db.delete(signInLinks).where(eq(signInLinks.userId, userId));
   await deps.db.delete(courseMembers).where(eq(courseMembers.userId, userId));
+  await deps.db.delete(handoutPrints).where(eq(handoutPrints.requestedBy, userId));
   await deps.db.delete(departmentMembers).where(eq(departmentMembers.userId, userId));
 }
 

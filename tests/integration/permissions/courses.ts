@@ -20,5 +20,6 @@ export const courseCases: Cases = {
     input: (world) => ({ ...theCourse(world), role: 'student', people: [{ name: 'New', email: 'new@pupil.example' }] }),
     expected: RUNNERS,
   },
+  'courses.gradebook_csv': { input: theCourse, expected: may('assistant', 'instructor', 'owner') },
   'courses.remove_person': { input: (world) => ({ ...theCourse(world), userId: world.student.userId }), expected: RUNNERS },
 };

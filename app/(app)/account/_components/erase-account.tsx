@@ -28,9 +28,9 @@ export function EraseAccount({ hasPassword, fresh }: EraseAccountProps) {
 }
 
 function EraseForm({ asksPassword, close }: { readonly asksPassword: boolean; readonly close: () => void }) {
-  const { busy, fields, failure, onSubmit } = useSubmit(eraseAccount, () => signOut({ callbackUrl: '/sign-in' }));
+  const { busy, fields, failure, form } = useSubmit(eraseAccount, () => signOut({ callbackUrl: '/sign-in' }));
   return (
-    <form onSubmit={onSubmit} className="flex flex-col gap-4">
+    <form {...form} className="flex flex-col gap-4">
       {failure ? <ErrorNote>{failure}</ErrorNote> : null}
       {asksPassword ? (
         <Field label="Your password" error={fields['current']}>

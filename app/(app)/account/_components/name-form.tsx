@@ -6,9 +6,9 @@ import { saveName } from '../actions';
 
 export function NameForm({ name }: { readonly name: string }) {
   const { announce } = useAnnouncer();
-  const { busy, fields, failure, onSubmit } = useSubmit(saveName, () => announce('Your name is saved.'));
+  const { busy, fields, failure, form } = useSubmit(saveName, () => announce('Your name is saved.'));
   return (
-    <form onSubmit={onSubmit} className="flex flex-col gap-3">
+    <form {...form} className="flex flex-col gap-3">
       {failure ? <ErrorNote>{failure}</ErrorNote> : null}
       <div className="flex flex-wrap items-end gap-3">
         <Field label="Name" error={fields['name']} className="min-w-64 flex-1">

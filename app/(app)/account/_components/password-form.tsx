@@ -16,14 +16,14 @@ interface PasswordFormProps {
 
 export function PasswordForm({ email, hasPassword, fresh }: PasswordFormProps) {
   const [saved, setSaved] = useState(false);
-  const { busy, fields, failure, onSubmit } = useSubmit(savePassword, async (value, form) => {
-    await enterAgain(value.email, String(new FormData(form).get('password')));
-    form.reset();
+  const { busy, fields, failure, form } = useSubmit(savePassword, async (value, sent) => {
+    await enterAgain(value.email, String(sent.data.get('password')));
+    sent.reset();
     setSaved(true);
   });
   if (!hasPassword && !fresh) return <LinkFirst />;
   return (
-    <form onSubmit={onSubmit} className="flex max-w-md flex-col gap-4">
+    <form {...form} className="flex max-w-md flex-col gap-4">
       {failure ? <ErrorNote>{failure}</ErrorNote> : null}
       {saved && !busy && !failure ? <SettledNote>The new password is saved. Every other device was signed out.</SettledNote> : null}
       <input type="hidden" name="username" autoComplete="username" value={email} readOnly />

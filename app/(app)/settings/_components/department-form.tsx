@@ -7,9 +7,9 @@ import { saveDepartment } from '../actions';
 
 export function DepartmentForm({ name, paper }: { readonly name: string; readonly paper: Paper }) {
   const { announce } = useAnnouncer();
-  const { busy, fields, failure, onSubmit } = useSubmit(saveDepartment, () => announce('The settings are saved.'));
+  const { busy, fields, failure, form } = useSubmit(saveDepartment, () => announce('The settings are saved.'));
   return (
-    <form onSubmit={onSubmit} className="flex max-w-xl flex-col gap-4">
+    <form {...form} className="flex max-w-xl flex-col gap-4">
       {failure ? <ErrorNote>{failure}</ErrorNote> : null}
       <Field label="Name" error={fields['name']}>
         <Input name="name" defaultValue={name} required maxLength={120} />

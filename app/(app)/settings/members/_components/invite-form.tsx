@@ -7,12 +7,12 @@ import { invite } from '../actions';
 
 export function InviteForm() {
   const { announce } = useAnnouncer();
-  const { busy, fields, failure, onSubmit } = useSubmit(invite, (_value, form) => {
-    form.reset();
+  const { busy, fields, failure, form } = useSubmit(invite, (_value, sent) => {
+    sent.reset();
     announce('The invitation is on its way by mail. It works for two weeks.');
   });
   return (
-    <form onSubmit={onSubmit} className="flex flex-col gap-3">
+    <form {...form} className="flex flex-col gap-3">
       {failure ? <ErrorNote>{failure}</ErrorNote> : null}
       <div className="flex flex-wrap items-start gap-3">
         <Field label="E-mail" error={fields['email']} className="min-w-64 flex-1">

@@ -1,7 +1,7 @@
 'use client';
 
 import { signIn } from 'next-auth/react';
-import { useSubmit } from '@/app/_components/use-submit';
+import { type Sent, useSubmit } from '@/app/_components/use-submit';
 import { Button, ErrorNote, Field, Input } from '@/components/ui';
 import { accept } from '../actions';
 
@@ -13,16 +13,15 @@ interface AcceptFormProps {
 }
 
 /** Someone new is signed in at once; someone known goes to sign in as they always do. */
-async function enter({ email, known }: { readonly email: string; readonly known: boolean }, form: HTMLFormElement): Promise<void> {
-  const password = new FormData(form).get('password');
-  const answer = known ? null : await signIn('password', { email, password, redirect: false });
+async function enter({ email, known }: { readonly email: string; readonly known: boolean }, { data }: Sent): Promise<void> {
+  const answer = known ? null : await signIn('password', { email, password: data.get('password'), redirect: false });
   window.location.assign(answer?.ok ? '/' : '/sign-in');
 }
 
 export function AcceptForm({ token, email, known }: AcceptFormProps) {
-  const { outcome, busy, fields, failure, onSubmit } = useSubmit(accept, enter);
+  const { outcome, busy, fields, failure, form } = useSubmit(accept, enter);
   return (
-    <form onSubmit={onSubmit} className="flex flex-col gap-4">
+    <form {...form} className="flex flex-col gap-4">
       {failure ? <ErrorNote>{failure}</ErrorNote> : null}
       <input type="hidden" name="token" value={token} />
       <input type="hidden" name="username" autoComplete="username" value={email} readOnly />

@@ -5,10 +5,10 @@ import { Button, ErrorNote, Field, Input, SettledNote } from '@/components/ui';
 import { askForLink } from '../actions';
 
 export function AskForLinkForm() {
-  const { outcome, busy, fields, failure, onSubmit } = useSubmit(askForLink);
+  const { outcome, busy, fields, failure, form } = useSubmit(askForLink);
   if (outcome?.ok) return <LinkSent email={outcome.value.email} />;
   return (
-    <form onSubmit={onSubmit} className="flex flex-col gap-4">
+    <form {...form} className="flex flex-col gap-4">
       <p className="text-ink-soft">We send a link to your mailbox. It signs you in once; then you can choose a new password.</p>
       {failure ? <ErrorNote>{failure}</ErrorNote> : null}
       <Field label="E-mail" error={fields['email']}>
