@@ -42,6 +42,7 @@ async function createTables(dataDir) {
     '--auth-root-authentication-method=socket',
     `--auth-root-socket-user=${os.userInfo().username}`,
     '--skip-test-db',
+    '--skip-name-resolve',
   ]);
   if (code !== 0) throw new SetupError(`mariadb-install-db failed (exit ${code}):\n${output}`);
   renameSync(draft, target);
