@@ -19,7 +19,7 @@ interface Options {
 }
 
 function readOptions(args: readonly string[]): Options | null {
-  const flags = new Set(args.filter((arg) => arg === '--musicxml' || arg === '--csv'));
+  const flags = new Set<string>(args.filter((arg) => arg === '--musicxml' || arg === '--csv'));
   const rest = args.filter((arg) => !flags.has(arg));
   const at = rest.indexOf('--out');
   const out = at >= 0 ? rest[at + 1] : undefined;

@@ -10,6 +10,8 @@ export const LABEL_TERMS = [
   ['closes-on-tonic', 'the music closes with the tonic'],
   ['opens-in-home-key', 'the music opens in its home key'],
   ['closes-in-home-key', 'the music closes in its home key'],
+  ['over-tonic-pedal', 'it stands over a held tonic'],
+  ['over-dominant-pedal', 'it stands over a held dominant'],
 ] as const;
 
 export type LabelTermName = (typeof LABEL_TERMS)[number][0];
@@ -25,4 +27,6 @@ export const HAND_LABEL_WEIGHTS: Readonly<Record<LabelTermName, number>> = {
   'closes-on-tonic': 0.8,
   'opens-in-home-key': 0.5,
   'closes-in-home-key': 0.8,
+  'over-tonic-pedal': 0.3,
+  'over-dominant-pedal': 0.3,
 };

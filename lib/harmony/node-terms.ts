@@ -1,3 +1,4 @@
+import { inversionOfBass } from './candidates';
 import { tonicOf } from './key-terms';
 import { type Material } from './material';
 import { BINS, BIN_SHIFT as SHIFT } from './slices';
@@ -47,7 +48,7 @@ export class NodeTerms {
     private readonly weights: Weights,
   ) {}
 
-  /** The part of a label's score that is quick to know; the rest (scaleScore) is never above 0 for sensible weights. */
+  /** The part of a label's score that is quick to know; the rest (scaleScore) is at most that of a pedal above 0. */
   quickScore(level: number, label: number, inversion: number): number {
     const slot = label * 4 + inversion;
     if (Number.isNaN(this.base[slot]!)) {
@@ -72,7 +73,9 @@ export class NodeTerms {
 
   scaleScore(s: number, c: number, key: number, label: number): number {
     this.measureScale(s, c, key, label);
-    return this.plain * this.weights.values[AT.label + 2]! + this.moving * this.weights.values[AT.label + 3]!;
+    const pedal = this.findPedal(s, c, key);
+    const held = pedal < 0 ? 0 : this.weights.values[AT.label + 10 + pedal]!;
+    return this.plain * this.weights.values[AT.label + 2]! + this.moving * this.weights.values[AT.label + 3]! + held;
   }
 
   readLabel(s: number, c: number, key: number, label: number, sink: TermSink): void {
@@ -82,6 +85,17 @@ export class NodeTerms {
     this.measureScale(s, c, key, label);
     if (this.plain > 0) sink(AT.label + 2, this.plain);
     if (this.moving > 0) sink(AT.label + 3, this.moving);
+    const pedal = this.findPedal(s, c, key);
+    if (pedal >= 0) sink(AT.label + 10 + pedal, 1);
+  }
+
+  /** A held bass foreign to the chord that is the key's tonic (0) or dominant (1); −1 when there is none. */
+  private findPedal(s: number, c: number, key: number): number {
+    const { root, kind, slices, segments } = this.material;
+    const bass = slices.bass[segments.start[s]!]!;
+    if (bass < 0 || inversionOfBass(root[c]!, kind[c]!, bass) >= 0) return -1;
+    const degree = bass - BIN_SHIFT - tonicOf(key);
+    return degree === 0 || degree === 1 ? degree : -1;
   }
 
   private readBase(label: number, inversion: number, sink: TermSink): void {

@@ -3,6 +3,7 @@ import type { Key } from '../theory/key';
 import type { Numeral } from '../theory/numeral';
 import type { Pitch } from '../theory/pitch';
 import type { Role } from '../theory/chord';
+import type { TendencyKind } from '../theory/tendencies';
 
 export const LABEL_STATES = ['suggested', 'accepted', 'changed'] as const;
 export type LabelState = (typeof LABEL_STATES)[number];
@@ -82,12 +83,14 @@ export type Resolution = (typeof RESOLUTIONS)[number];
 export interface TendencyTone {
   readonly noteId: number;
   readonly pitch: Pitch;
-  readonly kind: 'leading-tone' | 'seventh' | 'altered';
+  readonly kind: TendencyKind;
   /** Pitch class where it should go, as Fifths in `expected`; and where its voice went. */
   readonly expected: Pitch;
   readonly went: Pitch | null;
   readonly wentNoteId: number | null;
   readonly resolution: Resolution;
+  /** What it wants and why, as a sentence. */
+  readonly reason: string;
 }
 
 /** One readable term of the engine's sum for a label: positive speaks for it. */

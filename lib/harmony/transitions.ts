@@ -7,6 +7,7 @@ import { relationOf, signatureDistance } from './relation';
 import { DOMINANT_SEVENTH, KIND_COUNT, MAJOR, TEMPLATES } from './templates';
 import { TRANSITION_AT } from './transition-terms';
 import {
+  type EngineLabel,
   LABELS,
   LABEL_CLASS as CLASSES,
   LABEL_CLASSES,
@@ -30,6 +31,8 @@ const GOES_ON = T['applied-goes-on']!;
 const ELSEWHERE = T['applied-elsewhere']!;
 const SIX_FOUR_RESOLVES = T['six-four-resolves']!;
 const SIX_FOUR_ELSEWHERE = T['six-four-elsewhere']!;
+const AUTHENTIC = T.authentic!;
+const LEADING_TONE_RESOLVES = T['leading-tone-resolves']!;
 const KEY_CHANGE = T['key-change']!;
 const RELATION = T['relation-frequency']!;
 const DISTANCE = T['key-distance']!;
@@ -149,12 +152,12 @@ export class Transitions {
     }
     const bass = (this.bass[(labelOfState(to) << 2) + inversionOfState(to)]! + tonicOf(toKey)) - (this.bass[(labelOfState(from) << 2) + inversionOfState(from)]! + tonicOf(fromKey));
     sink(MOTION + bassMotionOf(bass), 1);
-    if (fromKey === toKey) this.readProgression(labelOfState(from), labelOfState(to), sink);
+    if (fromKey === toKey) this.readProgression(labelOfState(from), labelOfState(to), inversionOfState(from) + inversionOfState(to) === 0, sink);
     else this.readKeyChange(from, to, j, sink);
     return true;
   }
 
-  private readProgression(from: number, to: number, sink: TermSink): void {
+  private readProgression(from: number, to: number, inRootPosition: boolean, sink: TermSink): void {
     if (from === to) {
       sink(NEW_INVERSION, 1);
       return;
@@ -164,12 +167,20 @@ export class Transitions {
     sink(PROGRESSION_DELTA + cell, 1);
     const a = LABELS[from]!;
     const b = LABELS[to]!;
+    if (b.root === 0 && !b.target && !b.sixFour && !a.target) this.readCadence(a, inRootPosition, sink);
     if (a.root === b.root && a.target === b.target) this.readSeventh(a.kind, b.kind, sink);
     if (a.target) this.readApplied(from, to, sink);
     if (a.sixFour && !a.target && a.root === 0) {
       const resolves = b.root === 1 && !b.sixFour && (b.kind === MAJOR || b.kind === DOMINANT_SEVENTH);
       sink(resolves ? SIX_FOUR_RESOLVES : SIX_FOUR_ELSEWHERE, 1);
     }
+  }
+
+  /** A dominant or a leading-tone chord that goes to the tonic. */
+  private readCadence(before: EngineLabel, inRootPosition: boolean, sink: TermSink): void {
+    const isDominant = before.root === 1 && (before.kind === MAJOR || before.kind === DOMINANT_SEVENTH);
+    if (isDominant && inRootPosition) sink(AUTHENTIC, 1);
+    if (isDominant || before.root === 5) sink(LEADING_TONE_RESOLVES, 1);
   }
 
   private readSeventh(from: number, to: number, sink: TermSink): void {

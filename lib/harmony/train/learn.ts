@@ -26,7 +26,10 @@ export interface LearningOptions {
   readonly margin: number;
 }
 
-export const LEARNING: LearningOptions = { epochs: 4, seed: 1, namedRate: 0.012, labelRate: 0.03, fineRate: 0.03, margin: 1 };
+export const LEARNING: LearningOptions = { epochs: 4, seed: 1, namedRate: 0.02, labelRate: 0.04, fineRate: 0.05, margin: 1 };
+
+/** Learning sees a narrower lattice than the search: what is far off teaches nothing. */
+const TRAINING_LATTICE = { ...LATTICE_OPTIONS, nodesPerSegment: 28, nodeMargin: 8 };
 
 /** A small seeded generator (mulberry32), so that training gives the same weights every time. */
 export function seededRandom(seed: number): () => number {
@@ -81,7 +84,7 @@ function learnItem(item: TrainingItem, weights: Weights, gradient: Gradient, opt
   const { material, keys, keyCount } = item.prepared;
   if (material.slices.count === 0) return 0;
   const scored = scoreKeys(material.slices, material.evidence, weights, keys, keyCount);
-  const lattice = buildLattice(material, scored, weights, { ...LATTICE_OPTIONS, keep: keepGold(item.gold, material) });
+  const lattice = buildLattice(material, scored, weights, { ...TRAINING_LATTICE, keep: keepGold(item.gold, material) });
   const transitions = new Transitions(material, weights);
   const { credit, all } = creditNodes(lattice, material, item.gold);
   const wanted = findWanted(lattice, transitions, credit);
