@@ -6,9 +6,9 @@ import path from 'node:path';
 import { build, hasProgram, isBuilt, runProgram, startWeb, startWorker, waitUntilHealthy } from './app.mjs';
 import { sayDemo } from './demo.mjs';
 import { forgetData, startFakes } from './fakes.mjs';
-import { findRunning } from './lock.mjs';
+import { findRunning, takeLock } from './lock.mjs';
 import { checkNode, installNpmPackages, installPrograms, MARIADB } from './packages.mjs';
-import { DATA_DIR } from './places.mjs';
+import { DATA_DIR, ROOT } from './places.mjs';
 import { freePortFrom, isFree } from './ports.mjs';
 import { exitOf, stopOwned } from './processes.mjs';
 import { parseFlags, parsePort, runSession } from './session.mjs';
@@ -19,6 +19,7 @@ const USAGE = 'Usage: npm start [-- --reset]   (PORT=3000, DATA_DIR=.data)';
 const flags = parseFlags(USAGE, ['--reset', '--help']);
 const wanted = parsePort();
 const DIST_DIR = process.env.NEXT_DIST_DIR || '.next';
+const DIST_PATH = path.join(ROOT, DIST_DIR);
 
 async function choosePort() {
   const port = wanted ?? (await freePortFrom(3000));
@@ -34,14 +35,26 @@ function checkAlone() {
   throw new SetupError(`Understave runs already from this folder (process ${other.pid})${where}`);
 }
 
+/** A build replaced under a running server makes it answer with errors. */
+async function buildUnlessServed(env) {
+  if (isBuilt(DIST_DIR)) return 'nothing changed';
+  const other = findRunning(DIST_PATH);
+  if (other) throw new SetupError(`Process ${other.pid} serves the build in ${DIST_DIR}, and the sources have changed. Stop it, or build elsewhere: NEXT_DIST_DIR=…`);
+  return build(DIST_DIR, env);
+}
+
 async function prepare(env) {
   await step('Migrations', () => runProgram('lib/cli/migrate.ts', env).then(() => {}));
   if (hasProgram('db/seed/index.ts')) await step('Demo', () => runProgram('db/seed/index.ts', env).then(() => {}));
-  await step('Build', async () => (isBuilt(DIST_DIR) ? 'nothing changed' : build(DIST_DIR, env)));
+  await step('Build', () => buildUnlessServed(env));
 }
 
 async function serve({ port, address, env, fakes, defer, end }) {
   const logFile = path.join(fakes.logDir, 'web.log');
+  if (!findRunning(DIST_PATH)) {
+    const served = takeLock(DIST_PATH);
+    defer(async () => served.release());
+  }
   const web = startWeb({ mode: 'start', port, env, logFile });
   defer(() => stopOwned(web));
   const worker = await supervise('worker', () => startWorker({ env, logFile: path.join(fakes.logDir, 'worker.log') }));
