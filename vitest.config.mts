@@ -10,11 +10,11 @@ export default defineConfig({
     projects: [
       {
         resolve: { alias },
-        test: { name: 'unit', include: ['tests/unit/**/*.test.{ts,tsx}'], testTimeout: 60_000 },
+        test: { name: 'unit', include: ['tests/unit/**/*.test.{ts,tsx}'], testTimeout: 60_000, hookTimeout: 240_000 },
       },
       {
         resolve: { alias },
-        test: { name: 'published', include: ['tests/published/**/*.test.ts'], testTimeout: 60_000 },
+        test: { name: 'published', include: ['tests/published/**/*.test.ts'], testTimeout: 60_000, hookTimeout: 240_000 },
       },
       {
         resolve: { alias },
