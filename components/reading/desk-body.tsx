@@ -34,13 +34,13 @@ export function DeskBody(props: DeskBodyProps) {
   const sheet = props.sheet ?? DEFAULT_CONVENTIONS;
   const [state, dispatch] = useDeskState(props);
   const desk = useDesk(props, score, typeof window !== 'undefined' && window.innerWidth < WIDE ? 0.7 : 0.8, state, dispatch);
-  const { context } = desk;
+  const { context, isGiven } = desk;
   const saving = useSaving(context.powers.write ? base : null, props.userId, state, dispatch);
   const remarks = useRemarks(base);
   const label = getSelected(state);
   const why = useWhy(context.powers.proposals ? score : null, state.reading, label.id);
   const bar = findBar(score, label.start);
-  const settled = useMemo(() => state.reading.labels.filter((l) => !desk.isGiven(l) && isSettled(l)).length, [state.reading.labels, desk.isGiven]);
+  const settled = useMemo(() => state.reading.labels.filter((l) => !isGiven(l) && isSettled(l)).length, [state.reading.labels, isGiven]);
 
   useEffect(() => onProgress?.(settled, state.reading.labels.length), [onProgress, settled, state.reading.labels.length]);
 
@@ -83,7 +83,7 @@ export function DeskBody(props: DeskBodyProps) {
             label={label}
             place={namePlace(score, label.start)}
             sheet={sheet}
-            given={desk.isGiven(label)}
+            given={isGiven(label)}
             feedback={mode === 'feedback' ? props.feedback?.[label.id] : undefined}
             pages={pages}
             page={desk.page}
@@ -99,7 +99,7 @@ export function DeskBody(props: DeskBodyProps) {
         lastBar={lastBar}
         reading={state.reading}
         selected={label}
-        isGiven={desk.isGiven}
+        isGiven={isGiven}
         onSelect={(labelId) => dispatch({ kind: 'select', labelId })}
         onNextOpen={context.powers.write ? () => runCommand(context, findNextOpen(state, context.canWrite) ? 'next-open' : 'last') : undefined}
       />

@@ -1,6 +1,6 @@
 'use client';
 
-import { type KeyboardEvent, useCallback, useEffect, useMemo, useRef } from 'react';
+import { useCallback, useEffect, useMemo, useRef } from 'react';
 import { BoundaryGrip } from '@/components/score/boundary-grip';
 import type { SheetGeometry } from '@/components/score/geometry';
 import { Lanes } from '@/components/score/lanes';
@@ -12,10 +12,10 @@ import { moveBoundary } from '@/lib/harmony/edit-spans';
 import type { Label, TendencyTone } from '@/lib/harmony/reading';
 import type { Score } from '@/lib/score/score';
 import type { ConventionSheet } from '@/lib/theory/conventions';
-import { COMMANDS, chooseOther, runCommand, splitAt } from './commands';
+import { splitAt } from './commands';
 import { findSelection, getSelected } from './desk-state';
 import type { DeskProps } from './desk-types';
-import { beginsNumeral, nameKey } from './keymap';
+import { pressKey } from './press-key';
 import { describeLabel } from './label-words';
 import { NumeralEntry } from './numeral-entry';
 import { ScoreTable } from './score-table';
@@ -77,28 +77,6 @@ function useFocusFollows(region: { readonly current: HTMLElement | null }, label
   });
 }
 
-function pressKey(event: KeyboardEvent, desk: Desk): void {
-  const { context } = desk;
-  if (event.defaultPrevented || (event.target as HTMLElement).closest('button, input, textarea, summary')) return;
-  const key = nameKey(event);
-  const label = getSelected(context.state);
-  const command = COMMANDS.find((c) => c.keys.includes(key));
-  if (command) {
-    event.preventDefault();
-    return runCommand(context, command.id);
-  }
-  if (event.ctrlKey || event.metaKey || event.altKey || !context.powers.write) return;
-  const other = /^[1-9]$/.test(key) && context.powers.proposals ? label.others[Number(key) - 1] : undefined;
-  if (other) {
-    event.preventDefault();
-    return chooseOther(context, other);
-  }
-  if (!beginsNumeral(key)) return;
-  event.preventDefault();
-  if (context.canWrite(label)) context.ui.write(key);
-  else context.dispatch({ kind: 'say', text: 'This label is given and not to be changed.' });
-}
-
 function Underlay({ geometry, desk }: { readonly geometry: SheetGeometry; readonly desk: Desk }) {
   const chosen = findSelection(desk.context.state);
   return <SpanWash geometry={geometry} start={chosen[0]?.start ?? 0} end={chosen.at(-1)?.end ?? 0} />;
@@ -108,13 +86,13 @@ function Overlay(props: ScoreRegionProps & { readonly geometry: SheetGeometry })
   const { score, sheet, desk, geometry, tendencies, feedback } = props;
   const { context } = desk;
   const { state, dispatch, powers } = context;
+  const { open, noteGeometry, isGiven } = desk;
   const label = getSelected(state);
   const selectedIds = useMemo(() => new Set(findSelection(state).map((l) => l.id)), [state]);
-  const givenIds = useMemo(() => new Set(state.reading.labels.filter(desk.isGiven).map((l) => l.id)), [state.reading.labels, desk.isGiven]);
+  const givenIds = useMemo(() => new Set(state.reading.labels.filter(isGiven).map((l) => l.id)), [state.reading.labels, isGiven]);
   const marks = useMemo(() => (feedback ? new Map(Object.entries(feedback)) : undefined), [feedback]);
-  const describe = useCallback((l: Label) => describeLabel(score, l, sheet, desk.isGiven(l)), [score, sheet, desk.isGiven]);
+  const describe = useCallback((l: Label) => describeLabel(score, l, sheet, isGiven(l)), [score, sheet, isGiven]);
   const onSelect = useCallback((labelId: string, extend: boolean) => dispatch({ kind: 'select', labelId, extend }), [dispatch]);
-  const { open, noteGeometry } = desk;
   const onOpen = useCallback(() => powers.write && open({ kind: 'write', typed: null }), [powers.write, open]);
   useEffect(() => noteGeometry(geometry), [noteGeometry, geometry]);
 

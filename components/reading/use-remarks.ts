@@ -54,15 +54,19 @@ export function useRemarks(base: string | null): Remarks {
     return null;
   }, []);
 
-  const reload = useCallback(() => {
-    void call(`${base}/remarks`, 'GET').then((trouble) => setState((before) => (trouble === null ? 'ready' : before === 'ready' ? before : 'failed')));
+  const reload = useCallback(async () => {
+    const trouble = await call(`${base}/remarks`, 'GET');
+    setState((before) => (trouble === null ? 'ready' : before === 'ready' ? before : 'failed'));
   }, [base, call]);
 
   useEffect(() => {
     if (base === null) return;
-    reload();
-    const timer = setInterval(() => document.visibilityState === 'visible' && reload(), POLL_MS);
-    return () => clearInterval(timer);
+    const first = setTimeout(() => void reload(), 0);
+    const timer = setInterval(() => void (document.visibilityState === 'visible' && reload()), POLL_MS);
+    return () => {
+      clearTimeout(first);
+      clearInterval(timer);
+    };
   }, [base, reload]);
 
   return {
@@ -72,7 +76,7 @@ export function useRemarks(base: string | null): Remarks {
     add: (remark) => call(`${base}/remarks`, 'POST', remark),
     change: (remarkId, change) => call(`${base}/remarks/${remarkId}`, 'PATCH', change),
     takeBack: (remarkId) => call(`${base}/remarks/${remarkId}`, 'DELETE'),
-    reload,
+    reload: () => void reload(),
   };
 }
 

@@ -30,7 +30,8 @@ export function useSaving(base: string | null, userId: string, desk: DeskState, 
   useStoredEdits(base, userId, desk, dispatch);
   usePolling(base, desk, dispatch);
 
-  const next = desk.conflict ? undefined : desk.pending[0];
+  const nextId = desk.conflict ? null : (desk.pending[0]?.editId ?? null);
+  const blocked = trouble?.state === 'refused' || trouble?.state === 'signed-out';
   const latest = useRef(desk);
   useEffect(() => {
     latest.current = desk;
@@ -42,20 +43,21 @@ export function useSaving(base: string | null, userId: string, desk: DeskState, 
     setTurn((n) => n + 1);
   }, []);
 
+  // One effect per edit and per try; the desk's other changes do not start a second sending.
   useEffect(() => {
-    if (!base || !next || trouble?.state === 'refused' || trouble?.state === 'signed-out') return;
+    if (!base || nextId === null || blocked) return;
     let cancelled = false;
-    const wait = failures.current === 0 ? 0 : Math.min(LONGEST_WAIT_MS, FIRST_WAIT_MS * 2 ** (failures.current - 1));
-    const timer = setTimeout(async () => {
-      const answer = await postEdit(base, latest.current.version, next);
-      if (cancelled && answer.kind !== 'saved') return;
+    const send = async () => {
+      const edit = latest.current.pending.find((p) => p.editId === nextId);
+      const answer = edit && (await postEdit(base, latest.current.version, edit));
+      if (!edit || !answer || (cancelled && answer.kind !== 'saved')) return;
       if (answer.kind === 'saved') {
         failures.current = 0;
         setTrouble(null);
-        dispatch({ kind: 'received', version: answer.version, revisions: answer.revisions, confirmed: next.editId });
+        dispatch({ kind: 'received', version: answer.version, revisions: answer.revisions, confirmed: nextId });
       } else if (answer.kind === 'overtaken') {
         const now = await fetchReading(base);
-        if (now) dispatch({ kind: 'conflicted', conflict: { edit: next, version: now.version, theirs: now.reading } });
+        if (now) dispatch({ kind: 'conflicted', conflict: { edit, version: now.version, theirs: now.reading } });
       } else if (answer.kind === 'unreachable') {
         failures.current += 1;
         setTrouble({ state: 'kept-here', message: null });
@@ -63,13 +65,13 @@ export function useSaving(base: string | null, userId: string, desk: DeskState, 
       } else {
         setTrouble({ state: answer.kind, message: answer.kind === 'refused' ? answer.message : null });
       }
-    }, wait);
+    };
+    const timer = setTimeout(() => void send(), waitAfter(failures.current));
     return () => {
       cancelled = true;
       clearTimeout(timer);
     };
-    // One effect per edit and per try: the desk's other changes must not start a second sending.
-  }, [base, next?.editId, turn, trouble?.state, dispatch]);
+  }, [base, nextId, turn, blocked, dispatch]);
 
   useEffect(() => {
     window.addEventListener('online', retry);
@@ -77,6 +79,10 @@ export function useSaving(base: string | null, userId: string, desk: DeskState, 
   }, [retry]);
 
   return { state: stateOf(desk, trouble?.state ?? null), message: trouble?.message ?? null, retry };
+}
+
+function waitAfter(failures: number): number {
+  return failures === 0 ? 0 : Math.min(LONGEST_WAIT_MS, FIRST_WAIT_MS * 2 ** (failures - 1));
 }
 
 function stateOf(desk: DeskState, trouble: SaveState | null): SaveState {
@@ -103,11 +109,12 @@ function usePolling(base: string | null, desk: DeskState, dispatch: Dispatch<Des
   const { version } = desk;
   useEffect(() => {
     if (!base || !quiet) return;
-    const timer = setInterval(async () => {
+    const look = async () => {
       if (document.visibilityState !== 'visible') return;
       const received = await fetchRevisions(base, version);
       if (received && received.version > version) dispatch({ kind: 'received', ...received });
-    }, POLL_MS);
+    };
+    const timer = setInterval(() => void look(), POLL_MS);
     return () => clearInterval(timer);
   }, [base, quiet, version, dispatch]);
 }

@@ -11,11 +11,12 @@ export function ProposingNote({ readingId, state, title }: { readonly readingId:
   const router = useRouter();
   useEffect(() => {
     if (state !== 'proposing') return;
-    const timer = setInterval(async () => {
+    const look = async () => {
       const response = await fetch(`/api/readings/${readingId}`, { cache: 'no-store' }).catch(() => null);
       const answer = response?.ok ? ((await response.json()) as { state: string }) : null;
       if (answer && answer.state !== 'proposing') router.refresh();
-    }, LOOK_MS);
+    };
+    const timer = setInterval(() => void look(), LOOK_MS);
     return () => clearInterval(timer);
   }, [readingId, state, router]);
 
