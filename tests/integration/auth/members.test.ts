@@ -37,9 +37,11 @@ const person = (role: Actor['role'], mailbox: string) => addPerson(services.deps
 let mailbox = 0;
 const newEmail = () => `new-${(mailbox += 1)}@person.example`;
 
-/** The token of the newest invitation mail to an address. */
+/** The token of the newest invitation mail to an address; the next one will be newer. */
 async function tokenTo(email: string): Promise<string> {
-  const rows = await services.deps.db.select({ text: outbox.textBody }).from(outbox).where(eq(outbox.toAddress, email));
+  const mails = services.deps.db.select({ text: outbox.textBody }).from(outbox).where(eq(outbox.toAddress, email));
+  const rows = await mails.orderBy(outbox.createdAt);
+  services.clock.forward(1);
   const tokens = rows.map(({ text }) => /\/invitation\/([\w-]+)/.exec(text)?.[1] ?? '');
   return tokens.at(-1) ?? '';
 }

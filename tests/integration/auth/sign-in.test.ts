@@ -116,8 +116,11 @@ describe('signInWithPassword', () => {
   });
 });
 
+/** The newest link to an address; the next one will be newer. */
 async function linkOf(email: string): Promise<string | null> {
-  const rows = await services.deps.db.select({ text: outbox.textBody }).from(outbox).where(eq(outbox.toAddress, email));
+  const mails = services.deps.db.select({ text: outbox.textBody }).from(outbox).where(eq(outbox.toAddress, email));
+  const rows = await mails.orderBy(outbox.createdAt);
+  services.clock.forward(1);
   return /token=([\w-]+)/.exec(rows.at(-1)?.text ?? '')?.[1] ?? null;
 }
 
