@@ -24,7 +24,7 @@ export interface PartState {
   graces: WrittenGrace[];
 }
 
-/** Looks at every element of a bar, with the place it stands at, before it is read. */
+/** Looks at every element of a bar, with the place it stands at, before it is read; at last at the bar itself. */
 export type MeasureWatcher = (element: XmlElement, bar: number, draft: Draft, part: PartState) => void;
 
 /** Reads one bar of one part into the draft. Positions are ticks from the bar's start. */
@@ -37,6 +37,7 @@ export function readMeasure(draft: Draft, part: PartState, measure: XmlElement, 
     watch?.(element, bar, draft, part);
     ELEMENTS[element.name]?.(draft, part, element, bar);
   }
+  watch?.(measure, bar, draft, part);
   const written = draft.bars[bar];
   if (written) written.length = Math.max(written.length, draft.cursor.top);
 }
