@@ -4,8 +4,11 @@ import { useScore } from '@/components/reading/use-score';
 import type { SheetGeometry } from '@/components/score/geometry';
 import { ScoreView } from '@/components/score/score-view';
 import '@/components/score/score.css';
-import { Button, ErrorNote, Skeleton } from '@/components/ui';
+import { Button, ErrorNote, Skeleton, Spinner } from '@/components/ui';
 import type { BarRange } from './bar-range';
+
+/** No lanes here: the systems stand close, in engraving pixels. */
+const ROOM = 40;
 
 interface ScoreSheetProps {
   readonly fileUrl: string;
@@ -20,7 +23,7 @@ interface ScoreSheetProps {
 /** The score as it is engraved on the desk, without labels; bars can be picked on it. */
 export function ScoreSheet({ fileUrl, shown, range, onPick }: ScoreSheetProps) {
   const { loaded, retry } = useScore(fileUrl);
-  if (loaded.state === 'loading') return <Skeleton className="h-80" />;
+  if (loaded.state === 'loading') return <Loading />;
   if (loaded.state === 'failed') {
     return <ErrorNote title="The score cannot be drawn" action={<Button size="small" onClick={retry}>Try again</Button>}>{loaded.message}</ErrorNote>;
   }
@@ -34,13 +37,26 @@ export function ScoreSheet({ fileUrl, shown, range, onPick }: ScoreSheetProps) {
         score={score}
         firstBar={firstBar}
         lastBar={lastBar}
-        zoom={1}
+        zoom={0.72}
+        room={ROOM}
         heldTick={score.bars[range?.first ?? firstBar]?.start ?? 0}
-        underlay={(geometry) => (range ? <Bars geometry={geometry} of={range} className="border-b-3 border-ink bg-ochre-wash" /> : null)}
+        underlay={(geometry) => (range ? <Bars geometry={geometry} of={range} className="border-b-3 border-ink bg-selection" /> : null)}
         overlay={(geometry) =>
           onPick ? <Bars geometry={geometry} of={{ first: firstBar, last: lastBar }} className="cursor-pointer hover:bg-ink/8" onPick={onPick} /> : null
         }
       />
+    </div>
+  );
+}
+
+function Loading() {
+  return (
+    <div className="relative">
+      <Skeleton className="h-80" />
+      <p role="status" className="absolute inset-0 flex items-center justify-center gap-2 text-ink-soft">
+        <Spinner label="" />
+        The score is being fetched and drawn
+      </p>
     </div>
   );
 }

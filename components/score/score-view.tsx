@@ -18,6 +18,8 @@ export interface ScoreViewProps {
   readonly firstBar: number;
   readonly lastBar: number;
   readonly zoom: number;
+  /** Room to leave under each system, in engraving pixels; that of the lanes when it is left out. */
+  readonly room?: number;
   /** A moment whose sheet stays engraved wherever the region is scrolled. */
   readonly heldTick: number;
   /** Drawn under and over an engraved sheet, in its coordinates. */
@@ -26,7 +28,7 @@ export interface ScoreViewProps {
 }
 
 /** The score with room for lanes of ours under each system: sheets one below the other, scaled, each with its overlay. */
-export function ScoreView({ xml, score, firstBar, lastBar, zoom, heldTick, underlay, overlay }: ScoreViewProps) {
+export function ScoreView({ xml, score, firstBar, lastBar, zoom, room = LANE_ROOM, heldTick, underlay, overlay }: ScoreViewProps) {
   const region = useRef<HTMLDivElement>(null);
   const { engraved, scale } = useSheetWidth(region, zoom);
   const document = useMemo(() => new DOMParser().parseFromString(xml, 'application/xml'), [xml]);
@@ -57,7 +59,7 @@ export function ScoreView({ xml, score, firstBar, lastBar, zoom, heldTick, under
                   first={range.first}
                   last={range.last}
                   width={engraved}
-                  room={LANE_ROOM}
+                  room={room}
                   onEngraved={(drawn) => setKnown((all) => new Map(all).set(index, drawn))}
                   onFailed={setFailure}
                 />

@@ -25,7 +25,7 @@ export function LibraryTable({ view, rows, excerpts, total, of }: LibraryTablePr
             <SortHead view={view} sort="title">Title</SortHead>
             <SortHead view={view} sort="composer" className="hidden md:table-cell">Composer</SortHead>
             <Th className="hidden sm:table-cell">Key</Th>
-            <Th className="hidden text-right sm:table-cell">Bars</Th>
+            <Th className="hidden pr-6 text-right sm:table-cell">Bars</Th>
             <Th>State</Th>
             <SortHead view={view} sort="added" className="hidden lg:table-cell">Added</SortHead>
           </Row>

@@ -23,7 +23,7 @@ export function ScoreRows({ score, excerpts }: ScoreRowsProps) {
         </Th>
         <Td className="hidden md:table-cell">{score.composer || <span className="text-ink-soft italic">unknown</span>}</Td>
         <Td className="hidden sm:table-cell">{score.keyFifths === null ? null : formatSignature(score.keyFifths)}</Td>
-        <Td className="hidden text-right tabular sm:table-cell">{score.barCount}</Td>
+        <Td className="hidden pr-6 text-right tabular sm:table-cell">{score.barCount}</Td>
         <Td><ScoreMark score={score} excerptCount={excerpts.length} /></Td>
         <Td className="hidden text-small text-ink-soft lg:table-cell"><DateText date={score.createdAt} />, {score.uploaderName}</Td>
       </Row>
@@ -77,7 +77,7 @@ function ExcerptRow({ excerpt }: { readonly excerpt: ExcerptEntry }) {
       </Th>
       <Td className="hidden md:table-cell" />
       <Td className="hidden sm:table-cell">{excerpt.key ? <KeyName keyValue={excerpt.key} className="whitespace-nowrap" /> : null}</Td>
-      <Td className="hidden text-right tabular sm:table-cell">{excerpt.barCount}</Td>
+      <Td className="hidden pr-6 text-right tabular sm:table-cell">{excerpt.barCount}</Td>
       <Td><StateMark state={excerpt.progress.mark}>{excerpt.progress.words}</StateMark></Td>
       <Td className="hidden text-small text-ink-soft lg:table-cell"><DateText date={excerpt.createdAt} />, {excerpt.creatorName}</Td>
     </Row>
