@@ -27,8 +27,9 @@ function spellLine(key: Key, text: string): { line: string; ok: boolean } {
   if (!numeral.ok) return { line: `${text}\tcannot be read. ${numeral.error.message}`, ok: false };
   const chord = spellNumeral(key, numeral.value);
   const notes = chord.tones.map((tone) => formatPitchClass(tone.fifths)).join(' ');
-  const frame = numeral.value.applied.length > 0 ? `\tin ${formatKey(keyOfNumeral(key, numeral.value))}` : '';
-  return { line: `${text}\t${notes}\troot ${formatPitchClass(chord.root)}\t${numeral.value.quality}\t${figuresText(numeral.value)}${frame}`, ok: true };
+  const frame = numeral.value.applied.length > 0 ? [`in ${formatKey(keyOfNumeral(key, numeral.value))}`] : [];
+  const columns = [text, notes, `root ${formatPitchClass(chord.root)}`, numeral.value.quality, figuresText(numeral.value), ...frame];
+  return { line: columns.join('\t'), ok: true };
 }
 
 /** As printed, with the 5/3 that a triad in root position leaves out; a dash for a single tone. */

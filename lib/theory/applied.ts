@@ -42,10 +42,12 @@ export function checkAppliedQuality(key: Key, numeral: Numeral): AppliedFinding[
   const tonic = formatPitchClassForPeople(keyOfNumeral(key, numeral).tonic);
   const findings: AppliedFinding[] = [];
   if (isHalfDiminishedOnLeadingTone(numeral, target.mode) && target.mode === 'minor') {
-    findings.push({ code: 'half-diminished-of-minor', sentence: `${tonic} minor is tonicised by a fully diminished seventh; the half-diminished one goes to a major chord.` });
+    const sentence = `${tonic} minor is tonicised by a fully diminished seventh; the half-diminished one goes to a major chord.`;
+    findings.push({ code: 'half-diminished-of-minor', sentence });
   }
   if (plainTriad(outer?.mode ?? key.mode, target.degree) === 'diminished') {
-    findings.push({ code: 'target-diminished-in-key', sentence: `The key’s own triad on ${tonic} is diminished, and a diminished triad cannot be tonicised.` });
+    const sentence = `The key’s own triad on ${tonic} is diminished, and a diminished triad cannot be tonicised.`;
+    findings.push({ code: 'target-diminished-in-key', sentence });
   }
   return findings;
 }

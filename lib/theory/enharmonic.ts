@@ -17,18 +17,18 @@ const GERMAN = { degree: { step: 4, alter: 1 }, quality: 'augmented-sixth-german
 /**
  * Every key in which the sounding chord of a numeral is something else: a fully diminished seventh is vii°7 in four
  * minor keys, each inversion of it the root position of another; a dominant seventh sounds as a German sixth and back.
- * The reading in the numeral's own frame comes first, with its spelling, then the others by bass tone from root position
- * on. Keys are those with a written signature, the fewest accidentals first. [] for other chords.
+ * The four come from the one whose root is the bass, the numeral's own among
+ * them. Of a key's two names the one with fewer accidentals is taken. [] for other chords; added tones are left out.
  * Source: Integrated Musicianship: Theory, ch. 20a.
  */
 export function enharmonicReadings(key: Key, numeral: Numeral): EnharmonicReading[] {
-  const chord = spellNumeral(key, numeral);
+  const chord = spellNumeral(key, { ...numeral, added: [] });
   if (numeral.quality === 'diminished-seventh') return diminishedReadings(chord);
   if (numeral.quality === 'dominant-seventh') return [germanReading(chord)];
   return numeral.quality === 'augmented-sixth-german' ? [dominantReading(chord)] : [];
 }
 
-/** Each of the four sounding tones can be the leading tone. In close position from the bass up the roots alternate with the inversions 0, 3, 2, 1. */
+/** Each of the four tones can be the leading tone: over the bass itself in inversion 0, of the three above in 3, 2, 1. */
 function diminishedReadings({ tones, bass, root }: SpelledChord): EnharmonicReading[] {
   const bassIndex = tones.findIndex((tone) => tone.fifths === bass);
   return [0, 3, 2, 1].map((above) => {
@@ -67,7 +67,8 @@ function dominantReading({ tones, bass }: SpelledChord): EnharmonicReading {
  */
 function simplestReading(tonicPitchClass: number, mode: Key['mode'], numeral: Numeral, near: number): EnharmonicReading {
   const line = Array.from({ length: 29 }, (_, i): Key => ({ tonic: fifths(i - 14), mode }));
-  const written = line.filter((key) => pitchClassOf(key.tonic) === tonicPitchClass && isWrittenKey(key)).map((key) => readingOf(key, numeral));
+  const names = line.filter((key) => pitchClassOf(key.tonic) === tonicPitchClass && isWrittenKey(key));
+  const written = names.map((key) => readingOf(key, numeral));
   const accidentals = ({ key }: EnharmonicReading) => Math.abs(signatureOf(key));
   const signs = ({ chord }: EnharmonicReading) => chord.tones.reduce((sum, tone) => sum + Math.abs(alterOf(tone.fifths)), 0);
   const distance = ({ key }: EnharmonicReading) => Math.abs(key.tonic - near);

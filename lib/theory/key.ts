@@ -70,9 +70,11 @@ export interface KeyError {
   readonly message: string;
 }
 
+const NO_TONIC = 'A key begins with its tonic, a letter from A to G: Eb major, c# minor.';
 const TONIC = /^\s*([A-Ga-g])[\s-]*(sharp|flat|##|#|bb|b|♯♯|♯|♭♭|♭|𝄪|𝄫)?/u;
 const MODE = /^\s*(major|minor|maj\.?|min\.?)?\s*$/i;
-const ALTERS: Readonly<Record<string, number>> = { sharp: 1, '#': 1, '♯': 1, '##': 2, '♯♯': 2, '𝄪': 2, flat: -1, b: -1, '♭': -1, bb: -2, '♭♭': -2, '𝄫': -2 };
+const SHARPS: Readonly<Record<string, number>> = { sharp: 1, '#': 1, '♯': 1, '##': 2, '♯♯': 2, '𝄪': 2 };
+const FLATS: Readonly<Record<string, number>> = { flat: -1, b: -1, '♭': -1, bb: -2, '♭♭': -2, '𝄫': -2 };
 
 /**
  * Reads `Eb major`, `c# minor`, `f♯ minor`, `B-flat major`, `F sharp minor`, and a tonic alone, where a capital is
@@ -80,13 +82,13 @@ const ALTERS: Readonly<Record<string, number>> = { sharp: 1, '#': 1, '♯': 1, '
  */
 export function parseKey(text: string): Result<Key, KeyError> {
   const tonic = TONIC.exec(text);
-  if (!tonic) return err({ offset: text.length - text.trimStart().length, message: 'A key begins with its tonic, a letter from A to G: Eb major, c# minor.' });
+  if (!tonic) return err({ offset: text.length - text.trimStart().length, message: NO_TONIC });
   const [taken, letter = '', sign = ''] = tonic;
   const mode = MODE.exec(text.slice(taken.length));
   if (!mode) return err({ offset: taken.length, message: `Expected “major” or “minor” after the tonic ${taken.trim()}.` });
   const isCapital = letter === letter.toUpperCase();
-  const key: Key = { tonic: fifthsOf(letter.toUpperCase() as Letter, ALTERS[sign] ?? 0), mode: modeOfWord(mode[1], isCapital) };
-  return ok(key);
+  const alter = SHARPS[sign] ?? FLATS[sign] ?? 0;
+  return ok({ tonic: fifthsOf(letter.toUpperCase() as Letter, alter), mode: modeOfWord(mode[1], isCapital) });
 }
 
 function modeOfWord(word: string | undefined, isCapital: boolean): Mode {

@@ -21,7 +21,8 @@ export interface ChordNotes {
 export function nameChord(key: Key, notes: ChordNotes): Numeral[] {
   const frames: readonly (readonly Target[])[] = [[], ...TARGETS[key.mode].map((target) => [target])];
   const named = findChords(notes).flatMap((chord) => frames.flatMap((applied) => numeralsIn(key, chord, applied)));
-  return named.map((numeral) => ({ numeral, rank: rankOf(key, numeral) })).toSorted((a, b) => a.rank - b.rank).map(({ numeral }) => numeral);
+  const ranked = named.map((numeral) => ({ numeral, rank: rankOf(key, numeral) }));
+  return ranked.toSorted((a, b) => a.rank - b.rank).map(({ numeral }) => numeral);
 }
 
 interface FoundChord {

@@ -189,8 +189,8 @@ function formatPieces(pieces: NumeralPieces, sheet: ConventionSheet): string {
 
 const PLAIN_SIGNS: Readonly<Record<string, string>> = { '♭': 'b', '♯': '#', '♮': 'n', '°': 'o', ø: '0' };
 
-/** The default text on a plain keyboard: `viio7/V`, `vii07`, `bVI`. `parseNumeral` reads it as well. */
-export function formatNumeralPlain(numeral: Numeral, mode: Mode): string {
-  return formatNumeral(numeral, mode).replaceAll(/[♭♯♮°ø]/gu, (sign) => PLAIN_SIGNS[sign] ?? sign);
+/** The same text on a plain keyboard: `viio7/V`, `vii07`, `bVI`. `parseNumeral` with the same sheet reads it as well. */
+export function formatNumeralPlain(numeral: Numeral, mode: Mode, sheet: ConventionSheet = DEFAULT_CONVENTIONS): string {
+  return formatNumeral(numeral, mode, sheet).replaceAll(/[♭♯♮°ø]/gu, (sign) => PLAIN_SIGNS[sign] ?? sign);
 }
 

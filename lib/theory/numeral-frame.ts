@@ -3,6 +3,7 @@ import type { Triad } from './chord';
 import type { ConventionSheet } from './conventions';
 import { degreeOfSigns } from './diatonic';
 import type { Degree, Mode } from './key';
+import { FARTHEST_ALTER } from './numeral';
 import { STOPPED } from './numeral-messages';
 import { type NumeralError, type Roman, stopAt } from './numeral-scan';
 
@@ -15,9 +16,6 @@ export interface Frame {
 
 export type Read<T> = Result<T, NumeralError>;
 export type Stop = Extract<Read<never>, { ok: false }>;
-
-/** No chord of common practice stands on a degree altered by more than two half steps. */
-const FARTHEST_ALTER = 2;
 
 /** The degree a numeral stands on; `triad` says whether it is small (minor, diminished) or capital. */
 export function readDegree(roman: Roman, triad: Triad, { text, mode, sheet }: Frame): Read<Degree> {

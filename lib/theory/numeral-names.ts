@@ -28,8 +28,13 @@ export function readNamedHead(head: NamedHead, frame: Frame): Read<Numeral> {
   }
 }
 
+interface AugmentedSixth {
+  readonly quality: Quality;
+  readonly inversions: Readonly<Record<string, Numeral['inversion']>>;
+}
+
 /** Inversions by figures; the bare name and +6 mean the usual position, with the flat sixth in the bass. */
-const AUGMENTED_SIXTHS: Readonly<Record<AugmentedSixthName, { quality: Quality; inversions: Readonly<Record<string, Numeral['inversion']>> }>> = {
+const AUGMENTED_SIXTHS: Readonly<Record<AugmentedSixthName, AugmentedSixth>> = {
   It: { quality: 'augmented-sixth-italian', inversions: { '': 1, '6': 1, '63': 1, '64': 2, '5': 0, '53': 0 } },
   Ger: { quality: 'augmented-sixth-german', inversions: { '': 1, '6': 1, '65': 1, '653': 1, '7': 0, '43': 2, '42': 3, '2': 3 } },
   Fr: { quality: 'augmented-sixth-french', inversions: { '': 2, '6': 2, '43': 2, '643': 2, '7': 0, '65': 1, '42': 3, '2': 3 } },
@@ -70,8 +75,8 @@ function readCommonTone(head: NamedHead, { text }: Frame): Read<Numeral> {
   const isSeventh = figures.value.size === 4 && !figures.value.suspended;
   const [first] = head.figures;
   if (first && !isSeventh) return stopAt(text, first.at, STOPPED.commonTone);
-  const { inversion } = figures.value;
-  return refuseNotes(head, text) ?? ok({ ...NO_CONTEXT, degree: { step: 2, alter: 1 }, quality: 'diminished-seventh', inversion, special: 'common-tone' });
+  const commonTone = { ...NO_CONTEXT, degree: { step: 2, alter: 1 }, quality: 'diminished-seventh', special: 'common-tone' } as const;
+  return refuseNotes(head, text) ?? ok({ ...commonTone, inversion: figures.value.inversion });
 }
 
 function readCadential(head: NamedHead, { text, mode }: Frame): Read<Numeral> {

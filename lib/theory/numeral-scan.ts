@@ -65,7 +65,9 @@ export interface NamedHead extends Tail {
 }
 
 /** A target; `mark` where capitals throughout need M or m to tell the mode. */
-export type TargetHead = (Roman & { readonly mark: 'capital-major' | 'capital-minor' | null }) | { readonly at: number; readonly neapolitan: true };
+export type TargetHead =
+  | (Roman & { readonly mark: 'capital-major' | 'capital-minor' | null })
+  | { readonly at: number; readonly neapolitan: true };
 
 export interface ScannedNumeral {
   readonly head: RomanHead | NamedHead;
@@ -147,7 +149,7 @@ function scanNamed(reader: Reader, name: Token<ChordName>): Result<NamedHead, Nu
 
 function scanRoman(reader: Reader, expected: string): Result<Roman, NumeralError> {
   const at = reader.at;
-  const signs = signsOfText(reader.take(/♮|(?:♭|𝄫|b)+(?=\s*[♭𝄫ivIV])|(?:♯|𝄪|#)+/uy)?.[0] ?? '');
+  const signs = signsOfText(reader.take(/♮|n(?=\s*[ivIV])|(?:♭|𝄫|b)+(?=\s*[♭𝄫ivIV])|(?:♯|𝄪|#)+/uy)?.[0] ?? '');
   reader.skipSpace();
   const letters = reader.take(/[ivIV]+/y)?.[0];
   const start = reader.at - (letters?.length ?? 0);
@@ -168,7 +170,7 @@ function longestRoman(letters: string): number {
 }
 
 function signsOfText(text: string): Signs {
-  if (text === '♮') return 'natural';
+  if (text === '♮' || text === 'n') return 'natural';
   return [...text].reduce((sum, s) => sum + (s === '𝄪' ? 2 : s === '𝄫' ? -2 : s === '#' || s === '♯' ? 1 : -1), 0);
 }
 
@@ -213,7 +215,14 @@ function takeFirst<T>(reader: Reader, choices: readonly (readonly [RegExp, T])[]
   return null;
 }
 
-const FIGURE_SIGNS: Readonly<Record<string, FigureSign>> = { '♭': 'flat', b: 'flat', '♯': 'sharp', '#': 'sharp', '♮': 'natural', n: 'natural' };
+const FIGURE_SIGNS: Readonly<Record<string, FigureSign>> = {
+  '♭': 'flat',
+  b: 'flat',
+  '♯': 'sharp',
+  '#': 'sharp',
+  '♮': 'natural',
+  n: 'natural',
+};
 
 /** Figures with or without a slash, a dash or a space between them. */
 function scanFigures(reader: Reader): Figure[] {

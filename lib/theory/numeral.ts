@@ -59,6 +59,9 @@ export function degreeOfAugmentedSixth(quality: Quality): Degree {
   return quality === 'augmented-sixth-swiss' ? { step: 2, alter: 1 } : { step: 4, alter: 1 };
 }
 
+/** No chord of common practice stands on a degree altered by more than two half steps. */
+export const FARTHEST_ALTER = 2;
+
 /** Why these added tones cannot stand together over this chord; null when they can. */
 export function findAddedConflict({ quality, inversion, added }: Pick<Numeral, 'quality' | 'inversion' | 'added'>): string | null {
   const has = (tone: AddedTone) => added.includes(tone);
@@ -74,26 +77,38 @@ export function findAddedConflict({ quality, inversion, added }: Pick<Numeral, '
  */
 export function checkNumeral(numeral: Numeral): string[] {
   const { degree, quality, inversion, applied, added } = numeral;
+  const degrees = [degree, ...applied.map((target) => target.degree)];
+  const isNear = ({ alter }: Degree) => Number.isInteger(alter) && Math.abs(alter) <= FARTHEST_ALTER;
   const conflict = findAddedConflict(numeral);
-  const inOrder = ADDED_TONES.filter((tone) => added.includes(tone));
   return [
-    ...(inversion < sizeOf(quality) ? [] : [`A ${quality} chord has no inversion ${inversion}.`]),
-    ...([degree, ...applied.map((target) => target.degree)].every(({ alter }) => Number.isInteger(alter) && Math.abs(alter) <= 2) ? [] : ['A degree is altered by more than two half steps.']),
-    ...(conflict ? [`Added tones: ${conflict}`] : []),
-    ...(inOrder.length === added.length && inOrder.every((tone, i) => tone === added[i]) ? [] : ['Added tones are out of order or doubled.']),
+    ...unless(inversion < sizeOf(quality), `A ${quality} chord has no inversion ${inversion}.`),
+    ...unless(degrees.every(isNear), 'A degree is altered by more than two half steps.'),
+    ...unless(conflict === null, `Added tones: ${conflict ?? ''}`),
+    ...unless(isInOrder(added), 'Added tones are out of order or doubled.'),
     ...specialFindings(numeral),
   ];
 }
 
+function unless(isRight: boolean, finding: string): string[] {
+  return isRight ? [] : [finding];
+}
+
+function isInOrder(added: readonly AddedTone[]): boolean {
+  const places = added.map((tone) => ADDED_TONES.indexOf(tone));
+  return places.every((place, i) => i === 0 || place > (places[i - 1] as number));
+}
+
 function specialFindings(numeral: Numeral): string[] {
   const { degree, quality, inversion, applied, special, added } = numeral;
-  const isNameOnly = quality === 'other' || isAugmentedSixth(quality) || special === 'common-tone' || special === 'cadential-six-four';
-  const rightDegree = !isAugmentedSixth(quality) || isOn(degree, degreeOfAugmentedSixth(quality).step, degreeOfAugmentedSixth(quality).alter);
+  const isSixth = isAugmentedSixth(quality);
+  const own = degreeOfAugmentedSixth(quality);
+  const isBare = quality === 'other' || isSixth || special === 'common-tone' || special === 'cadential-six-four';
+  const misfit = `${special ?? 'No special'} does not fit a ${quality} chord on degree ${degree.step}, inversion ${inversion}.`;
   return [
-    ...(isNameOnly && added.length > 0 ? ['This chord takes no added tones.'] : []),
-    ...(rightDegree ? [] : [`The ${quality} stands on its own degree only.`]),
-    ...(fitsSpecial(numeral) ? [] : [`${special ?? 'No special'} does not fit a ${quality} chord on degree ${degree.step}, inversion ${inversion}.`]),
-    ...(special === 'pedal-tone' && applied.length > 0 ? ['A pedal takes no target.'] : []),
+    ...unless(!isBare || added.length === 0, 'This chord takes no added tones.'),
+    ...unless(!isSixth || isOn(degree, own.step, own.alter), `The ${quality} stands on its own degree only.`),
+    ...unless(fitsSpecial(numeral), misfit),
+    ...unless(special !== 'pedal-tone' || applied.length === 0, 'A pedal takes no target.'),
   ];
 }
 

@@ -1,6 +1,6 @@
 import { isAugmentedSixth, sizeOf, triadOf } from './chord';
 import type { Mode } from './key';
-import type { Numeral, Target } from './numeral';
+import { type Numeral, type Target, isNeapolitan } from './numeral';
 
 /**
  * Which chord a chord leads to, as the textbooks give it, most usual first.
@@ -23,8 +23,9 @@ function chord(step: Numeral['degree']['step'], quality: Numeral['quality'], inv
 function tonicOf(numeral: Numeral, mode: Mode, inversion: Inversion = 0): Numeral {
   const [target, ...rest] = numeral.applied;
   if (!target) return chord(1, mode, inversion, []);
-  const isLoweredSecond = target.degree.step === 2 && target.degree.alter === -1 && target.mode === 'major';
-  return { degree: target.degree, quality: target.mode, inversion, applied: rest, special: isLoweredSecond ? 'neapolitan' : null, added: [] };
+  const { degree, mode: quality } = target;
+  const special = isNeapolitan({ degree, quality }) ? 'neapolitan' : null;
+  return { degree, quality, inversion, applied: rest, special, added: [] };
 }
 
 function cadentialOf(numeral: Numeral, mode: Mode): Numeral {

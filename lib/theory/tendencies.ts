@@ -84,38 +84,39 @@ function stepBelow(tone: Fifths, { frame }: Situation, leadingToneFollows: boole
 }
 
 function cadentialPull({ fifths: f, role }: SpelledTone, { frame }: Situation): Pull | null {
-  if (role === 'root') return pull('suspended', [frame.tonic + 5], `The fourth over the bass, ${name(f)}, falls to the third, ${name(frame.tonic + 5)}.`);
-  if (role === 'third') return pull('suspended', [frame.tonic + 2], `The sixth over the bass, ${name(f)}, falls to the fifth, ${name(frame.tonic + 2)}.`);
-  return null;
+  const [third, fifth] = [frame.tonic + 5, frame.tonic + 2];
+  if (role === 'root') return pull('suspended', [third], `The fourth over the bass, ${name(f)}, falls to the third, ${name(third)}.`);
+  return role === 'third' ? pull('suspended', [fifth], `The sixth over the bass, ${name(f)}, falls to the fifth, ${name(fifth)}.`) : null;
 }
 
 function commonTonePull({ fifths: f, role }: SpelledTone, { frame }: Situation): Pull | null {
   const third = fifthsOfDegree(frame, { step: 3, alter: 0 });
-  if (role === 'root') return pull('altered', [third], `${name(f)} moves by half step to ${name(third)}, the third of the chord it embellishes.`);
-  if (role === 'third') return pull('altered', [f + HALF_STEP_UP], `${name(f)} rises to ${name(f + HALF_STEP_UP)}.`);
-  if (role === 'fifth') return pull('fifth', [frame.tonic + 1], `${name(f)} falls by step to ${name(frame.tonic + 1)}.`);
-  return null;
+  const fifth = frame.tonic + 1;
+  if (role === 'root') return pull('altered', [third], `${name(f)} goes to ${name(third)}, the third of the chord it embellishes.`);
+  if (role === 'third') return pull('altered', [fifth], `${name(f)} rises by half step to ${name(fifth)}.`);
+  return role === 'fifth' ? pull('fifth', [fifth], `${name(f)} falls by step to ${name(fifth)}.`) : null;
 }
 
 function neapolitanPull({ fifths: f, role }: SpelledTone, situation: Situation): Pull | null {
   const { tonic } = situation.frame;
-  if (role === 'root') return pull('altered', [tonic + 5, tonic], `The lowered second, ${name(f)}, falls to ${name(tonic + 5)} in the dominant, or to ${name(tonic)} on the way there.`);
-  if (role === 'fifth') return pull('altered', [tonic + 1], `${name(f)} falls by half step to ${name(tonic + 1)}.`);
-  return role === 'seventh' ? pull('seventh', [tonic + 5], `The seventh, ${name(f)}, falls by step to ${name(tonic + 5)}.`, [tonic]) : null;
+  const [leading, sol] = [tonic + 5, tonic + 1];
+  if (role === 'root') return pull('altered', [leading, tonic], `The lowered second, ${name(f)}, falls to ${name(leading)} in the dominant, or to ${name(tonic)} on the way.`);
+  if (role === 'fifth') return pull('altered', [sol], `${name(f)} falls by half step to ${name(sol)}.`);
+  return role === 'seventh' ? pull('seventh', [leading], `The seventh, ${name(f)}, falls by step to ${name(leading)}.`, [tonic]) : null;
 }
 
 /** Distances from the tonic: the flat sixth −4, the raised fourth 6, the flat third −3, the raised second 9. */
 function augmentedSixthPull({ fifths: f }: SpelledTone, { frame: { tonic, mode } }: Situation): Pull | null {
-  const sol = tonic + 1;
+  const [re, mi, sol] = [tonic + 2, tonic + 4, tonic + 1];
   switch (f - tonic) {
     case -4:
       return pull('altered', [sol], `${name(f)} falls by half step to ${name(sol)}: the augmented sixth opens to an octave.`);
     case 6:
       return pull('altered', [sol], `${name(f)} rises by half step to ${name(sol)}: the augmented sixth opens to an octave.`, [f + CHROMATIC_DOWN]);
     case -3:
-      return pull('altered', [tonic + 2], `${name(f)} falls by half step to ${name(tonic + 2)} in the dominant; a six-four on the way may hold it.`, mode === 'major' ? [f, tonic + 4] : [f]);
+      return pull('altered', [re], `${name(f)} falls by half step to ${name(re)}; a six-four on the way may hold it.`, mode === 'major' ? [f, mi] : [f]);
     case 9:
-      return pull('altered', [tonic + 4], `${name(f)} rises by half step to ${name(tonic + 4)} in the six-four.`);
+      return pull('altered', [mi], `${name(f)} rises by half step to ${name(mi)} in the six-four.`);
     default:
       return null;
   }

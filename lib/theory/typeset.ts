@@ -77,7 +77,12 @@ function partsOf(pieces: NumeralPieces, sheet: ConventionSheet): NumeralParts {
  * A label in its place after another: where the sheet prints the cadential six-four as V6/4 and the dominant follows in
  * root position, the dominant shows only the figures in which the six-four resolves, 5/3 or 7/5/3.
  */
-export function typesetAfter(previous: Numeral | null, numeral: Numeral, mode: Mode, sheet: ConventionSheet = DEFAULT_CONVENTIONS): NumeralParts {
+export function typesetAfter(
+  previous: Numeral | null,
+  numeral: Numeral,
+  mode: Mode,
+  sheet: ConventionSheet = DEFAULT_CONVENTIONS,
+): NumeralParts {
   const parts = typesetNumeral(numeral, mode, sheet);
   if (sheet.cadential !== 'dominant' || !previous || !resolvesSixFour(previous, numeral)) return parts;
   return { ...parts, letters: '', figures: fullFiguresOf(numeral.quality, 0), joint: null, applied: [] };

@@ -31,10 +31,10 @@ describe('text of a numeral', () => {
 
   it('formatNumeralPlain gives ASCII that is read as the same numeral', () => {
     fc.assert(
-      fc.property(anyNumeral, anyMode, (numeral, mode) => {
-        const text = formatNumeralPlain(numeral, mode);
+      fc.property(anyNumeral, anyMode, anySheet, (numeral, mode, sheet) => {
+        const text = formatNumeralPlain(numeral, mode, sheet);
         expect(text).toMatch(/^[ -~]+$/);
-        expect({ text, ...parseNumeral(text, mode) }).toEqual({ text, ok: true, value: numeral });
+        expect({ text, ...parseNumeral(text, mode, sheet) }).toEqual({ text, ok: true, value: numeral });
       }),
       { numRuns: 1500 },
     );
