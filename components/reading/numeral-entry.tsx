@@ -27,7 +27,7 @@ interface NumeralEntryProps {
 
 /** The line that is typed into, at its label. It says at every key what the text means, or where it stops making sense. */
 export function NumeralEntry({ label, score, sheet, typed, onWrite, onCancel, compares }: NumeralEntryProps) {
-  const [text, setText] = useState(() => typed ?? (label.numeral ? formatNumeralPlain(label.numeral, label.key.mode) : ''));
+  const [text, setText] = useState(() => typed ?? (label.numeral ? formatNumeralPlain(label.numeral, label.key.mode, sheet) : ''));
   const input = useRef<HTMLInputElement>(null);
   const id = useId();
   const read = parseWritten(text, label.key, sheet);
