@@ -1,51 +1,65 @@
-import { zipSync } from 'fflate';
+/** Short MusicXML texts for tests. */
 
-interface WrittenScore {
-  readonly title?: string;
-  readonly composer?: string;
-  readonly bars?: number;
-  /** Printed number of the first bar. */
-  readonly firstNumber?: number;
+interface NoteOptions {
+  readonly duration?: number;
+  readonly voice?: string;
+  readonly staff?: number;
+  readonly chord?: boolean;
+  /** Extra children before the duration (`<grace/>`, `<cue/>`). */
+  readonly before?: string;
+  /** Extra children after it (ties, notations). */
+  readonly after?: string;
 }
 
-/** A small piano piece in C for the tests: one whole-note triad a bar, tonic and dominant in turn. */
-export function musicXml({ title = 'A piece of the tests', composer = 'Nobody', bars = 4, firstNumber = 1 }: WrittenScore = {}): string {
-  const measures = Array.from({ length: bars }, (_, i) => measure(firstNumber + i, i === 0, i % 2 === 0 ? TONIC : DOMINANT));
-  return [
-    '<?xml version="1.0" encoding="UTF-8"?>',
-    '<score-partwise version="4.0">',
-    `  <work><work-title>${title}</work-title></work>`,
-    `  <identification><creator type="composer">${composer}</creator></identification>`,
-    '  <part-list><score-part id="P1"><part-name>Piano</part-name></score-part></part-list>',
-    `  <part id="P1">${measures.join('')}</part>`,
-    '</score-partwise>',
-  ].join('\n');
+/** `note('C#4', {duration: 2})`; `note('r')` is a rest. */
+export function note(pitch: string, { duration = 1, voice = '1', staff, chord, before = '', after = '' }: NoteOptions = {}): string {
+  const what = pitch === 'r' ? '<rest/>' : pitchXml(pitch);
+  const length = before.includes('<grace') ? '' : `<duration>${duration}</duration>`;
+  const place = `<voice>${voice}</voice>${staff === undefined ? '' : `<staff>${staff}</staff>`}`;
+  const [ties, rest] = [after.match(/<tie [^>]*>/g)?.join('') ?? '', after.replace(/<tie [^>]*>/g, '')];
+  return `<note>${before}${chord ? '<chord/>' : ''}${what}${length}${ties}${place}${rest}</note>`;
 }
 
-const TONIC = ['C3', 'E4', 'G4', 'C5'];
-const DOMINANT = ['G3', 'D4', 'F4', 'B4'];
-const ATTRIBUTES =
-  '<attributes><divisions>1</divisions><key><fifths>0</fifths></key><time><beats>4</beats><beat-type>4</beat-type></time><clef><sign>G</sign><line>2</line></clef></attributes>';
-
-function measure(number: number, isFirst: boolean, chord: readonly string[]): string {
-  const notes = chord.map(
-    (note, i) =>
-      `<note>${i > 0 ? '<chord/>' : ''}<pitch><step>${note.charAt(0)}</step><octave>${note.charAt(1)}</octave></pitch><duration>4</duration><voice>1</voice><type>whole</type></note>`,
-  );
-  return `<measure number="${number}">${isFirst ? ATTRIBUTES : ''}${notes.join('')}</measure>`;
+function pitchXml(text: string): string {
+  const match = /^([A-G])(#*|b*)(\d)$/.exec(text);
+  if (!match) throw new Error(`not a pitch: ${text}`);
+  const [, step, signs = '', octave] = match;
+  const alter = signs.startsWith('b') ? -signs.length : signs.length;
+  return `<pitch><step>${step}</step>${alter === 0 ? '' : `<alter>${alter}</alter>`}<octave>${octave}</octave></pitch>`;
 }
 
-const CONTAINER = '<?xml version="1.0"?><container><rootfiles><rootfile full-path="score.xml"/></rootfiles></container>';
-
-/** The same in a compressed file. Source of its form: W3C MusicXML 4.0, "Compressed .MXL files". */
-export function mxlOf(xml: string): Uint8Array<ArrayBuffer> {
-  const text = (content: string) => new TextEncoder().encode(content);
-  return new Uint8Array(zipSync({ 'META-INF/container.xml': text(CONTAINER), 'score.xml': text(xml) }));
+export function backup(duration: number): string {
+  return `<backup><duration>${duration}</duration></backup>`;
 }
 
-const BOMB_BYTES = 101 * 1024 * 1024;
+export function forward(duration: number): string {
+  return `<forward><duration>${duration}</duration></forward>`;
+}
 
-/** A small file that unpacks to more than is ever read. */
-export function bombMxl(): Uint8Array<ArrayBuffer> {
-  return new Uint8Array(zipSync({ 'META-INF/container.xml': new TextEncoder().encode(CONTAINER), 'score.xml': new Uint8Array(BOMB_BYTES).fill(0x20) }));
+export function attributes(content: string): string {
+  return `<attributes>${content}</attributes>`;
+}
+
+export function time(beats: string, beatType: number): string {
+  return `<time><beats>${beats}</beats><beat-type>${beatType}</beat-type></time>`;
+}
+
+/** Bars, each its content or `[attributes of the measure element, content]`. */
+type BarXml = string | readonly [string, string];
+
+function measureXml(bar: BarXml, i: number): string {
+  const [facts, content] = typeof bar === 'string' ? [`number="${i + 1}"`, bar] : bar;
+  return `<measure ${facts}>\n${content}\n</measure>\n`;
+}
+
+/** A partwise score of these parts. */
+export function partwise(...parts: readonly (readonly BarXml[])[]): string {
+  const list = parts.map((_, i) => `<score-part id="P${i + 1}"><part-name>Part ${i + 1}</part-name></score-part>`).join('');
+  const bodies = parts.map((bars, i) => `<part id="P${i + 1}">\n${bars.map(measureXml).join('')}</part>\n`).join('');
+  return `<?xml version="1.0" encoding="UTF-8"?>\n<score-partwise version="4.0">\n<part-list>${list}</part-list>\n${bodies}</score-partwise>\n`;
+}
+
+/** One part; its first bar gets 4/4 and one division a quarter unless it says otherwise. */
+export function onePart(...bars: readonly BarXml[]): string {
+  return partwise(bars);
 }
