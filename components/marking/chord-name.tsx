@@ -12,12 +12,10 @@ interface ChordNameProps {
 
 /** A numeral as the course prints it, with its key where that is asked for. */
 export function ChordName({ chord, sheet, keyShown = false }: ChordNameProps) {
-  const numeral = <NumeralText parts={typesetNumeral(chord.numeral, chord.key.mode, sheet)} className="text-lead" />;
-  if (!keyShown) return numeral;
   return (
-    <span className="inline-flex items-baseline gap-1.5 whitespace-nowrap">
-      <span className="font-book text-small text-ink-soft italic"><KeyName keyValue={chord.key} />:</span>
-      {numeral}
+    <span className="whitespace-nowrap">
+      {keyShown ? <span className="font-book text-small text-ink-soft italic"><KeyName keyValue={chord.key} />:{' '}</span> : null}
+      <NumeralText parts={typesetNumeral(chord.numeral, chord.key.mode, sheet)} className="text-lead" />
     </span>
   );
 }

@@ -125,12 +125,13 @@ const NO_COUNTS: Counts = { students: 0, handedIn: 0, released: 0 };
 
 async function countSubmissions(db: Db, ids: readonly string[]): Promise<ReadonlyMap<string, Counts>> {
   if (ids.length === 0) return new Map();
+  // Columns are named in full: in a query of one table drizzle leaves the table out, and the subqueries have their own.
   const rows = await db
     .select({
       id: assignments.id,
-      students: sql<number>`(select count(*) from course_members m where m.course_id = ${assignments.courseId} and m.role = 'student')`,
-      handedIn: sql<number>`(select count(distinct b.student_id) from submissions b where b.assignment_id = ${assignments.id} and b.state <> 'working')`,
-      released: sql<number>`(select count(distinct b.student_id) from submissions b where b.assignment_id = ${assignments.id} and b.state = 'released')`,
+      students: sql<number>`(select count(*) from course_members m where m.course_id = assignments.course_id and m.role = 'student')`,
+      handedIn: sql<number>`(select count(distinct b.student_id) from submissions b where b.assignment_id = assignments.id and b.state <> 'working')`,
+      released: sql<number>`(select count(distinct b.student_id) from submissions b where b.assignment_id = assignments.id and b.state = 'released')`,
     })
     .from(assignments)
     .where(inArray(assignments.id, [...ids]));

@@ -1,6 +1,6 @@
 import { eq } from 'drizzle-orm';
 import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest';
-import { findAssignment, unsafeGetKeyRow, unsafeListQuestions } from '@/db/queries/assignments';
+import { findAssignment, listAssignments, unsafeGetKeyRow, unsafeListQuestions } from '@/db/queries/assignments';
 import { listUsedRemarks, unsafeListMarks } from '@/db/queries/marks';
 import { findReading } from '@/db/queries/readings';
 import { findOwnSubmission, findSubmissionToMark, listOwnWork } from '@/db/queries/submissions';
@@ -197,6 +197,17 @@ describe('marking', () => {
     expect((await findSubmissionToMark(deps().db, world.instructor, ada))?.state).toBe('marked');
     unwrap(await settleMarks(deps(), world.assistant, { assignmentId, answers: answers.slice(0, 1), settled: false }));
     expect((await findSubmissionToMark(deps().db, world.instructor, ada))?.state).toBe('handed_in');
+  });
+});
+
+describe('listAssignments', () => {
+  it('counts the course’s own students and their work only', async () => {
+    await addOpenAssignment(deps(), await createCourseWorld(deps()));
+    const ada = await hand(0, 'Cad64 V7 _ _');
+    await hand(1, 'Cad64 V7 _ _');
+    await writeAnswer(deps(), world.students[2], assignmentId, 'Cad64');
+    unwrap(await releaseMarks(deps(), world.instructor, { assignmentId, submissionIds: [ada] }));
+    expect(await listAssignments(deps().db, world.instructor, world.courseId)).toMatchObject([{ students: 3, handedIn: 2, released: 1 }]);
   });
 });
 

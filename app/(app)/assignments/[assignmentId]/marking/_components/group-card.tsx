@@ -27,6 +27,7 @@ interface GroupCardProps {
 export function GroupCard(props: GroupCardProps) {
   const { assignment, question, group, tabbable, onFocus, onKeyDown } = props;
   const [single, setSingle] = useState<string | null>(null);
+  const [open, setOpen] = useState(false);
   const [first] = group.answers;
   if (!first) return null;
   const isSettled = group.answers.every((one) => one.settled);
@@ -38,11 +39,11 @@ export function GroupCard(props: GroupCardProps) {
       aria-label={`${countOf(group)}, ${formatPoints(first.points)} of ${formatPoints(first.maxPoints)} points`}
       onFocus={(event) => event.target === event.currentTarget && onFocus()}
       onKeyDown={onKeyDown}
-      className={classNames('border bg-sheet px-3 py-2.5 sm:px-4', isSettled ? 'border-rule' : 'border-rule-strong')}
+      className={classNames('border bg-sheet px-3 py-2 sm:px-4', isSettled ? 'border-rule' : 'border-rule-strong')}
     >
       <GroupHead {...props} first={first} settled={isSettled} />
       {first.proposed.reasons.length > 0 ? <p className="mt-1 text-small text-ink-soft">{first.proposed.reasons.join(' ')}</p> : null}
-      <Names group={group} single={single} onSingle={setSingle} />
+      {open ? <Names group={group} single={single} onSingle={setSingle} /> : null}
       <MarkEditor
         key={single ?? 'all'}
         assignmentId={assignment.id}
@@ -51,7 +52,9 @@ export function GroupCard(props: GroupCardProps) {
         pointStep={assignment.pointStep}
         remarks={props.remarks}
         whose={chosen ? chosen.studentName : group.answers.length === 1 ? first.studentName : 'all of them'}
-      />
+      >
+        <button type="button" className="link min-h-6 text-small" aria-expanded={open} onClick={() => { setOpen(!open); setSingle(null); }}>{open ? 'Hide the names' : 'Whose'}</button>
+      </MarkEditor>
     </li>
   );
 }
@@ -99,22 +102,16 @@ function TakeAsRight({ assignment, question, answer }: { readonly assignment: Ma
 }
 
 function Names({ group, single, onSingle }: { readonly group: GroupView; readonly single: string | null; onSingle(submissionId: string | null): void }) {
-  const [open, setOpen] = useState(false);
   return (
-    <div className="mt-1.5 text-small">
-      <button type="button" className="link min-h-6" aria-expanded={open} onClick={() => { setOpen(!open); onSingle(null); }}>{open ? 'Hide the names' : 'Whose'}</button>
-      {open ? (
-        <ul className="mt-1 flex flex-wrap gap-1.5">
-          {group.answers.map((one) => (
-            <li key={one.submissionId}>
-              <Button size="small" kind={one.submissionId === single ? 'primary' : 'plain'} aria-pressed={one.submissionId === single} onClick={() => onSingle(one.submissionId === single ? null : one.submissionId)}>
-                {one.studentName}
-                {one.overridden ? <span className="tabular">{formatPoints(one.points)}</span> : null}
-              </Button>
-            </li>
-          ))}
-        </ul>
-      ) : null}
-    </div>
+    <ul aria-label="Mark one of them alone" className="mt-2 flex flex-wrap gap-1.5">
+      {group.answers.map((one) => (
+        <li key={one.submissionId}>
+          <Button size="small" kind={one.submissionId === single ? 'primary' : 'plain'} aria-pressed={one.submissionId === single} onClick={() => onSingle(one.submissionId === single ? null : one.submissionId)}>
+            {one.studentName}
+            {one.overridden ? <span className="tabular">{formatPoints(one.points)}</span> : null}
+          </Button>
+        </li>
+      ))}
+    </ul>
   );
 }

@@ -1,6 +1,6 @@
 'use client';
 
-import { useId, useState } from 'react';
+import { type ReactNode, useId, useState } from 'react';
 import { useAct } from '@/app/_components/use-act';
 import { Button, Select, TextArea } from '@/components/ui';
 import { formatPoints } from '@/lib/marking/points';
@@ -18,6 +18,8 @@ interface MarkEditorProps {
   readonly remarks: readonly string[];
   /** `all of them`, or a student's name. */
   readonly whose: string;
+  /** At the end of the row. */
+  readonly children?: ReactNode;
 }
 
 /** Points, verdict and remark of some answers to one question. */
@@ -30,23 +32,22 @@ export function MarkEditor(props: MarkEditorProps) {
   const set = (points: number | null, verdict: Verdict | null) => void act(() => override({ ...at, points, verdict }), points === null ? 'As proposed again.' : 'Points changed.');
   const verdict = (next: Verdict) => set(first.points, next);
   return (
-    <div className="mt-2 flex flex-col gap-2 border-t border-rule pt-2">
-      <div className="flex flex-wrap items-center gap-x-4 gap-y-2">
-        <span className="flex items-center gap-1" role="group" aria-label={`Points for ${whose}`}>
-          <Button size="small" aria-label="Fewer points" busy={busy} disabled={first.points <= 0} onClick={() => set(stepPoints(first.points, -1, pointStep, first.maxPoints), overriddenVerdict(first))}>−</Button>
-          <span className="tabular min-w-20 text-center">{formatPoints(first.points)} of {formatPoints(first.maxPoints)}</span>
-          <Button size="small" aria-label="More points" busy={busy} disabled={first.points >= first.maxPoints} onClick={() => set(stepPoints(first.points, 1, pointStep, first.maxPoints), overriddenVerdict(first))}>+</Button>
-        </span>
-        <Select aria-label={`Verdict for ${whose}`} className="w-56" value={first.verdict} onChange={(event) => verdict(VERDICTS.find((one) => one === event.target.value) ?? first.verdict)}>
-          {VERDICTS.map((one) => <option key={one} value={one}>{VERDICT_NAMES[one]}</option>)}
-        </Select>
-        {answers.some((one) => one.overridden) ? (
-          <Button size="small" kind="quiet" busy={busy} onClick={() => set(null, null)}>
-            As proposed ({formatPoints(first.proposed.points)})
-          </Button>
-        ) : null}
-      </div>
+    <div className="mt-2 flex flex-wrap items-center gap-x-4 gap-y-2 border-t border-rule pt-2">
+      <span className="flex items-center gap-1" role="group" aria-label={`Points for ${whose}`}>
+        <Button size="small" aria-label="Fewer points" busy={busy} disabled={first.points <= 0} onClick={() => set(stepPoints(first.points, -1, pointStep, first.maxPoints), overriddenVerdict(first))}>−</Button>
+        <span className="tabular min-w-20 text-center">{formatPoints(first.points)} of {formatPoints(first.maxPoints)}</span>
+        <Button size="small" aria-label="More points" busy={busy} disabled={first.points >= first.maxPoints} onClick={() => set(stepPoints(first.points, 1, pointStep, first.maxPoints), overriddenVerdict(first))}>+</Button>
+      </span>
+      <Select aria-label={`Verdict for ${whose}`} className="w-52" value={first.verdict} onChange={(event) => verdict(VERDICTS.find((one) => one === event.target.value) ?? first.verdict)}>
+        {VERDICTS.map((one) => <option key={one} value={one}>{VERDICT_NAMES[one]}</option>)}
+      </Select>
+      {answers.some((one) => one.overridden) ? (
+        <Button size="small" kind="quiet" busy={busy} onClick={() => set(null, null)}>
+          As proposed ({formatPoints(first.proposed.points)})
+        </Button>
+      ) : null}
       <RemarkEditor {...props} remark={first.remark ?? ''} onSave={(text) => act(() => writeRemark({ ...at, remark: text }), text === '' ? 'The remark is gone.' : 'The remark is saved.')} />
+      {props.children}
     </div>
   );
 }
@@ -67,9 +68,9 @@ function RemarkEditor({ remark, remarks, whose, onSave }: RemarkEditorProps) {
   const id = useId();
   if (!open) {
     return (
-      <div className="flex flex-wrap items-baseline gap-x-3 text-small">
-        {remark ? <p className="border-l-2 border-ochre pl-2.5 font-book text-base">{remark}</p> : null}
-        <button type="button" className="link min-h-6" onClick={() => { setText(remark); setOpen(true); }}>{remark ? 'Change the remark' : 'Write a remark'}</button>
+      <div className={remark ? 'order-last flex w-full flex-wrap items-baseline gap-x-3' : 'contents'}>
+        {remark ? <p className="border-l-2 border-ochre pl-2.5 font-book">{remark}</p> : null}
+        <button type="button" className="link min-h-6 text-small" onClick={() => { setText(remark); setOpen(true); }}>{remark ? 'Change the remark' : 'Write a remark'}</button>
       </div>
     );
   }
@@ -78,7 +79,7 @@ function RemarkEditor({ remark, remarks, whose, onSave }: RemarkEditorProps) {
   };
   return (
     <form
-      className="flex flex-col gap-2"
+      className="order-last flex w-full flex-col gap-2"
       onSubmit={(event) => {
         event.preventDefault();
         void save(text);
