@@ -5,7 +5,7 @@ import { type Bar, type TimeSignature, ticks } from './score';
 /** Exporters round tuplets, so a bar's sum may miss its metre by a hair: up to 1/24 of a quarter is taken for rounding. */
 export const ROUNDING_PER_QUARTER = 24;
 
-/** A bar while it is laid out: with the length its metre asks for, null without metre. */
+/** A bar while it is laid out: with the length its metre asks for, null without a written metre. */
 interface LaidBar extends Omit<Bar, 'offset'> {
   readonly nominal: number | null;
 }
@@ -19,7 +19,7 @@ export function layOutBars(draft: Draft): Bar[] {
     const metre = metres[index];
     const nominal = metre === null ? null : nominalTicks(draft, metre ?? COMMON_TIME);
     const actual = lengthOf(draft, length, nominal);
-    laid.push({ index, number, implicit, start: ticks(start), length: ticks(actual), time: timeAt(metre, start), nominal });
+    laid.push({ index, number, implicit, start: ticks(start), length: ticks(actual), time: timeAt(metre, start), nominal: metre ? nominal : null });
     start += actual;
   });
   if (!Number.isSafeInteger(start)) refuse('bad_duration', 'The score is too long to be counted exactly. Export the file again.', { element: 'duration' });

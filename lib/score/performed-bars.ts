@@ -60,13 +60,13 @@ class Performance {
 
   /** Opens a repeat that starts here; gives the bar to go on with when an ending here is not for this pass. */
   private enter(bar: number): number | undefined {
+    if (this.repeats[this.repeats.length - 1]?.start === bar) return undefined;
     const ending = this.endings.find(({ first }) => first === bar);
     if (ending && ending.passes.length > 0) {
       if (!ending.passes.includes(this.currentPass(ending))) return ending.last + 1;
       if (ending.passes.includes(ending.lastPass) && !this.repeatsWithin(ending)) this.closeRepeat(ending.last);
     }
-    const open = this.repeats[this.repeats.length - 1];
-    if (this.find('repeat-start', bar) && open?.start !== bar) this.repeats.push({ start: bar, pass: 1 });
+    if (this.find('repeat-start', bar)) this.repeats.push({ start: bar, pass: 1 });
     return undefined;
   }
 
