@@ -69,7 +69,8 @@ function measureStrength(score: Score, { labels, end }: Reading, i: number): num
 
 /** The top part falls silent within the goal or right after it. */
 function restFollows(score: Score, goal: Label): boolean {
-  const top = score.notes.filter((note) => note.part === 0 && note.start < goal.end && note.start + note.duration > goal.start);
+  const voices = indexVoices(score);
+  const top = voices.soundingIn(goal.start, goal.end).filter((note) => note.part === 0);
   const release = top.reduce((last, note) => Math.max(last, note.start + note.duration), 0);
-  return top.length > 0 && !score.notes.some((note) => note.part === 0 && note.start >= goal.start && note.start <= release && note.start + note.duration > release);
+  return top.length > 0 && !voices.soundingIn(release, release + 1).some((note) => note.part === 0);
 }

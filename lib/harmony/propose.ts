@@ -75,6 +75,13 @@ export function proposeReading(score: Score, options: ProposeOptions = {}): Read
   return makeReading(start, end, withFixed(labelSpans(decoded, slices, start, end), fixed));
 }
 
+/** A decoded score as a reading of the whole score. */
+export function readingOf(decoded: Decoded, slices: Slices, score: Score): Reading {
+  const last = score.bars.at(-1);
+  const end = last ? last.start + last.length : 0;
+  return makeReading(0, end, labelSpans(decoded, slices, 0, end));
+}
+
 function labelSpans(decoded: Decoded, slices: Slices, start: number, end: number): readonly Label[] {
   const { spans, states } = decoded;
   return spans.map((span, i): Label => {

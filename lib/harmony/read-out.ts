@@ -36,7 +36,7 @@ export interface ReadOutOptions {
   readonly boundaryGain: number;
 }
 
-export const READ_OUT: ReadOutOptions = { boundaryCost: 0.05, boundaryGain: 0.1 };
+export const READ_OUT: ReadOutOptions = { boundaryCost: 0.3, boundaryGain: 0.5 };
 
 /**
  * The reading that is expected to be right for most of the time: among all tilings by lattice nodes the one with the

@@ -1,7 +1,7 @@
 import { rational } from '../score/rational';
 import { type Bar, type Score } from '../score/score';
 import { reduceApplied } from '../theory/applied';
-import { type Quality } from '../theory/chord';
+import { qualityInReport } from '../theory/chord';
 import { formatNumeralPlain } from '../theory/numeral-format';
 import { formatPitchClass } from '../theory/pitch';
 import { spellNumeral } from '../theory/spell';
@@ -28,14 +28,6 @@ interface LabelReport {
   readonly special: string | null;
   readonly certainty: number | null;
 }
-
-/** Qualities of ours that the contract names otherwise. */
-const REPORTED: Readonly<Partial<Record<Quality, string>>> = {
-  'dominant-ninth': 'dominant-seventh',
-  'dominant-minor-ninth': 'dominant-seventh',
-  'augmented-sixth-swiss': 'augmented-sixth-german',
-  'augmented-seventh': 'other',
-};
 
 /** The reading as a report. Blank labels (no numeral) are left out: their time counts as not analysed. */
 export function reportOf(score: Score, reading: Reading): AnalysisReport {
@@ -67,7 +59,7 @@ function reportLabel(label: Label, bars: readonly Bar[], quarters: (ticks: numbe
       numeral: formatNumeralPlain(numeral, key.mode),
       root: formatPitchClass(root),
       bass: formatPitchClass(bass),
-      quality: REPORTED[numeral.quality] ?? numeral.quality,
+      quality: qualityInReport(numeral.quality),
       inversion: Math.min(3, numeral.inversion),
       degree,
       applied: applied ? { ...applied.degree, mode: applied.mode } : null,

@@ -58,24 +58,32 @@ function isStep(a: Note, b: Note): boolean {
   return Math.abs(midiOf(a.pitch) - midiOf(b.pitch)) <= 2 && midiOf(a.pitch) !== midiOf(b.pitch);
 }
 
-/** Follows the voice past the chord's end: straight there, later within the next chord, in another voice, otherwise, or not at all. */
+/**
+ * Follows the voice past the chord's end: straight there, later within the next chord, in another voice, otherwise, or not
+ * at all. Tones that the voice still gives to the same chord (an arpeggio) are passed over; after an arpeggio the tone may
+ * come anywhere in the next one.
+ */
 function resolve(note: Note, tendency: Tendency, span: TendencySpan): { went: Note | null; resolution: Resolution } {
   const goesWell = (next: Note) => tendency.expected.some((f) => sounds(next, f)) && isStep(note, next);
-  let next = span.voices.after(note);
-  const first = next;
-  for (let passed = 0; next && next.start < span.nextEnd && passed < 6; passed++) {
-    if (goesWell(next)) return { went: next, resolution: isPrompt(note, next, passed, span) ? 'as-expected' : 'delayed' };
-    next = span.voices.after(next);
-  }
+  const line = followLine(note, span);
+  const at = line.findIndex(goesWell);
+  const found = line[at];
+  const within = line.filter((next) => next.start < span.end).length;
+  if (found) return { went: found, resolution: at <= within || within > 0 ? 'as-expected' : 'delayed' };
   const elsewhere = findElsewhere(note, tendency, span);
   if (elsewhere) return { went: elsewhere, resolution: 'in-another-voice' };
-  if (!first || note.start + note.duration >= span.nextEnd) return { went: null, resolution: 'unresolved' };
-  return { went: first, resolution: sounds(first, note.pitch.fifths) ? 'unresolved' : 'irregular' };
+  const next = line[within];
+  if (!next || note.start + note.duration >= span.nextEnd) return { went: null, resolution: 'unresolved' };
+  return { went: next, resolution: sounds(next, note.pitch.fifths) ? 'unresolved' : 'irregular' };
 }
 
-/** Resolved as the chord changes: by the very next note, not held far into the next chord. */
-function isPrompt(note: Note, next: Note, passed: number, { end }: TendencySpan): boolean {
-  return passed === 0 && note.start + note.duration <= end && next.start <= end;
+const LONGEST_LINE = 24;
+
+/** The notes that follow in the voice, up to the end of the next chord. */
+function followLine(note: Note, { voices, nextEnd }: TendencySpan): readonly Note[] {
+  const line: Note[] = [];
+  for (let next = voices.after(note); next && next.start < nextEnd && line.length < LONGEST_LINE; next = voices.after(next)) line.push(next);
+  return line;
 }
 
 /** Another voice that takes the expected tone at the tendency's own height, just as the chord changes. */

@@ -244,8 +244,18 @@ function pivotSlot(mode: number, root: number, kind: number, sixFour: boolean): 
   return ((mode * ROOT_RANGE + root + ROOT_RANGE / 2) * KIND_COUNT + kind) * 2 + (sixFour ? 1 : 0);
 }
 
-/** The commonest label of every chord in either mode, −1 where a chord has none. */
+const commonest = new WeakMap<Tables, Int16Array>();
+
+/** The commonest label of every chord in either mode, −1 where a chord has none; found once per tables. */
 function commonestLabels(tables: Tables): Int16Array {
+  const known = commonest.get(tables);
+  if (known) return known;
+  const found = findCommonest(tables);
+  commonest.set(tables, found);
+  return found;
+}
+
+function findCommonest(tables: Tables): Int16Array {
   const best = new Int16Array(2 * ROOT_RANGE * KIND_COUNT * 2).fill(-1);
   for (let mode = 0; mode < 2; mode++) {
     for (let root = -ROOT_RANGE / 2; root < ROOT_RANGE / 2; root++) {
