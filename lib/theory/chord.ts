@@ -95,10 +95,17 @@ export function findSeventhChord(triad: Triad, seventh: SeventhSize): Quality | 
   return QUALITIES.find((q) => sizeOf(q) === 4 && triadOf(q) === triad && seventhOf(q) === seventh) ?? null;
 }
 
-/** The quality as the report contract names it: ninths without the ninth; what it has no name for is `other`. */
+/** Qualities that the report contract has no name for: a ninth without its ninth, the Swiss sixth as it sounds. */
+const REPORTED: Readonly<Partial<Record<Quality, Quality>>> = {
+  'dominant-ninth': 'dominant-seventh',
+  'dominant-minor-ninth': 'dominant-seventh',
+  'augmented-sixth-swiss': 'augmented-sixth-german',
+  'augmented-seventh': 'other',
+};
+
+/** The quality as the report contract names it. */
 export function qualityInReport(quality: Quality): Quality {
-  if (sizeOf(quality) === 5) return 'dominant-seventh';
-  return quality === 'augmented-seventh' || quality === 'augmented-sixth-swiss' ? 'other' : quality;
+  return REPORTED[quality] ?? quality;
 }
 
 /**

@@ -24,10 +24,6 @@ export function transpose(pitch: Pitch, interval: Interval): Pitch {
   return { fifths: target, octave };
 }
 
-export function transposePitchClass(f: Fifths, by: number): Fifths {
-  return fifths(f + by);
-}
-
 /** Signed size in semitones: a step is a letter, so the octaves are in `steps`. */
 export function semitonesOf(interval: Interval): number {
   const octaves = Math.floor(interval.steps / 7);
