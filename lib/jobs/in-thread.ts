@@ -25,8 +25,9 @@ export interface ThreadBounds {
   readonly megabytes: number;
 }
 
-/** Some ten times what the largest score within the limits of lib/score takes on a busy machine. */
-const READ_BOUNDS: ThreadBounds = { milliseconds: 60_000, megabytes: 1_024 };
+/** Several times what the largest score within the limits of lib/score takes (200,000 notes: about a second). */
+export const READ_BOUNDS: ThreadBounds = { milliseconds: 5_000, megabytes: 512 };
+/** Some ten times what the largest such score takes on a busy machine. */
 const PROPOSE_BOUNDS: ThreadBounds = { milliseconds: 180_000, megabytes: 1_024 };
 /** A thread that does not even start in this time is a fault of ours. */
 const START_MILLISECONDS = 30_000;

@@ -20,5 +20,5 @@ export const DEFAULT_LIMITS: ScoreLimits = {
   entries: 64,
   notes: 200_000,
   depth: 200,
-  barElements: 500_000,
+  barElements: 100_000,
 };
