@@ -62,18 +62,19 @@ export function ScoreRegion(props: ScoreRegionProps) {
   );
 }
 
-/** Keeps the keyboard on the selected label, once it is in the region. */
+/** Keeps the keyboard on the selected label once it is in the region, and gives it back when what was opened closes. */
 function useFocusFollows(region: { readonly current: HTMLElement | null }, labelId: string, opened: string): void {
   const before = useRef({ labelId, opened });
   useEffect(() => {
-    const moved = before.current.labelId !== labelId || (before.current.opened !== 'none' && opened === 'none');
+    const closed = before.current.opened !== 'none' && opened === 'none';
+    const moved = before.current.labelId !== labelId;
     before.current = { labelId, opened };
-    if (!moved || opened !== 'none') return;
-    const target = region.current?.querySelector<HTMLElement>(`[data-label="${labelId}"]`);
-    const active = document.activeElement;
-    const within = active === document.body || region.current?.contains(active);
-    if (within) target?.focus();
-    else target?.scrollIntoView({ block: 'nearest', inline: 'nearest' });
+    if (opened !== 'none' || !(closed || moved)) return;
+    const find = () => region.current?.querySelector<HTMLElement>(`[data-label="${labelId}"]`);
+    // A dialog lets go of the keyboard only after it has closed.
+    if (closed) setTimeout(() => find()?.focus(), 0);
+    else if (document.activeElement === document.body || region.current?.contains(document.activeElement)) find()?.focus();
+    else find()?.scrollIntoView({ block: 'nearest', inline: 'nearest' });
   });
 }
 

@@ -25,18 +25,19 @@ export function nameBeat(score: Score, tick: number): string {
   return `${index + 1}${nameFraction(to > from ? (at - from) / (to - from) : 0)}`;
 }
 
-const FRACTIONS: readonly (readonly [number, string])[] = [
-  [0, ''],
-  [1 / 4, '¼'],
-  [1 / 3, '⅓'],
-  [1 / 2, '½'],
-  [2 / 3, '⅔'],
-  [3 / 4, '¾'],
-];
+const GLYPHS: Readonly<Record<string, string>> = {
+  '1/2': '½', '1/3': '⅓', '2/3': '⅔', '1/4': '¼', '3/4': '¾', '1/6': '⅙', '5/6': '⅚', '1/8': '⅛', '3/8': '⅜', '5/8': '⅝', '7/8': '⅞',
+};
+const FINEST = 48;
 
+/** The fraction in lowest terms, as one sign where there is one; a rounded decimal when it is finer than any note is. */
 function nameFraction(part: number): string {
-  const near = FRACTIONS.find(([value]) => Math.abs(value - part) < 0.001);
-  return near ? near[1] : `+${Math.round(part * 100) / 100}`;
+  if (part === 0) return '';
+  for (let below = 2; below <= FINEST; below += 1) {
+    const above = Math.round(part * below);
+    if (Math.abs(above / below - part) < 0.0005) return GLYPHS[`${above}/${below}`] ?? ` ${above}/${below}`;
+  }
+  return ` + ${part.toFixed(2)}`;
 }
 
 export function namePlace(score: Score, tick: number): string {

@@ -20,7 +20,7 @@ export function KeyLine({ geometry, regions, onOpen }: KeyLineProps) {
         {spans.map((span) => <path key={`${span.region.start} ${span.system}`} d={bracket(geometry, span)} stroke="currentColor" strokeWidth="1" fill="none" />)}
       </svg>
       {spans.map((span) => (
-        <KeyName key={`${span.region.start} ${span.system}`} span={span} top={laneTop(geometry, span) + KEY_LINE.top} onOpen={onOpen} />
+        <KeyName key={`${span.region.start} ${span.system}`} span={span} until={nextOnSystem(spans, span)} top={laneTop(geometry, span) + KEY_LINE.top} onOpen={onOpen} />
       ))}
     </>
   );
@@ -37,10 +37,21 @@ function bracket(geometry: SheetGeometry, span: KeySpan): string {
   return `${span.begins ? `M${span.x} ${y - 6}V${y}` : `M${span.x} ${y}`}H${right}${span.ends ? `V${y - 6}` : ''}`;
 }
 
-function KeyName({ span, top, onOpen }: { readonly span: KeySpan; readonly top: number; readonly onOpen: KeyLineProps['onOpen'] }) {
+/** x where the next region's name begins; a name may reach beyond its region as long as there is none. */
+function nextOnSystem(spans: readonly KeySpan[], span: KeySpan): number {
+  return spans.find((s) => s.system === span.system && s.x > span.x)?.x ?? Infinity;
+}
+
+interface KeyNameProps extends Pick<KeyLineProps, 'onOpen'> {
+  readonly span: KeySpan;
+  readonly until: number;
+  readonly top: number;
+}
+
+function KeyName({ span, until, top, onOpen }: KeyNameProps) {
   const name = formatKeyForPeople(span.region.key);
-  const look = classNames('absolute truncate px-1 text-left font-book italic leading-none', span.begins ? 'text-[16px] text-ink' : 'text-[13px] text-ink-soft');
-  const style = { left: span.x, top, height: KEY_LINE.height - 4, maxWidth: Math.max(30, span.right - span.x - 6) };
+  const look = classNames('absolute truncate px-0.5 text-left font-book italic leading-none', span.begins ? 'text-[16px] text-ink' : 'text-[14.5px] text-ink-soft');
+  const style = { left: span.x, top, height: KEY_LINE.height - 4, maxWidth: Number.isFinite(until) ? until - span.x - 2 : undefined };
   if (!onOpen || !span.begins) return <span aria-hidden={!span.begins} className={look} style={style}>{name}</span>;
   return (
     <button type="button" tabIndex={-1} className={classNames(look, 'hover:underline')} style={style} title="Change this key" onClick={() => onOpen(span.region.start)}>
