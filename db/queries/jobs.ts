@@ -38,11 +38,12 @@ const CLAIM_COLUMNS = {
 } as const;
 
 /** Due jobs, and those whose worker let its lease run out; the two lists are separate so that each has its index. */
-async function lockDueJobs(tx: Db, now: Date, limit: number) {
+async function lockDueJobs(tx: Db, kinds: readonly string[], now: Date, limit: number) {
+  const isKnown = inArray(jobs.kind, [...kinds]);
   const dropped = await tx
     .select(CLAIM_COLUMNS)
     .from(jobs)
-    .where(and(eq(jobs.state, 'running'), lt(jobs.leasedUntil, now)))
+    .where(and(eq(jobs.state, 'running'), lt(jobs.leasedUntil, now), isKnown))
     .orderBy(asc(jobs.leasedUntil))
     .limit(limit)
     .for('update', { skipLocked: true });
@@ -50,22 +51,28 @@ async function lockDueJobs(tx: Db, now: Date, limit: number) {
   const queued = await tx
     .select(CLAIM_COLUMNS)
     .from(jobs)
-    .where(and(eq(jobs.state, 'queued'), lte(jobs.runAfter, now)))
+    .where(and(eq(jobs.state, 'queued'), lte(jobs.runAfter, now), isKnown))
     .orderBy(asc(jobs.runAfter))
     .limit(limit - dropped.length)
     .for('update', { skipLocked: true });
   return [...dropped, ...queued];
 }
 
+/** Who asks for jobs: its id, and the kinds it knows. Those of a newer release stay for a newer worker. */
+export interface Claimant {
+  readonly workerId: string;
+  readonly kinds: readonly string[];
+}
+
 /**
- * Takes up to `limit` jobs for `workerId` until `leaseUntil`. Rows that another worker is taking are passed over, so any
+ * Takes up to `limit` jobs for a worker until `leaseUntil`. Rows that another worker is taking are passed over, so any
  * number of workers may ask at once. A job that was given up on the last attempt it had comes back with
  * `attempt > maxAttempts`: its worker died with it, and it is to be buried, not run.
  */
-export async function claimJobs(db: Db, workerId: string, limit: number, now: Date, leaseUntil: Date): Promise<ClaimedJob[]> {
+export async function claimJobs(db: Db, { workerId, kinds }: Claimant, limit: number, now: Date, leaseUntil: Date): Promise<ClaimedJob[]> {
   return db.transaction(
     async (tx) => {
-      const due = await lockDueJobs(tx, now, limit);
+      const due = await lockDueJobs(tx, kinds, now, limit);
       if (due.length === 0) return [];
       await tx
         .update(jobs)

@@ -34,7 +34,8 @@ function leaseFrom(now: Date): Date {
 /** Takes one due job and does it; false when none is due. */
 export async function runNextJob(worker: WorkerContext): Promise<boolean> {
   const { deps } = worker;
-  const [job] = await claimJobs(deps.db, worker.id, 1, deps.now(), leaseFrom(deps.now()));
+  const claimant = { workerId: worker.id, kinds: Object.keys(worker.handlers) };
+  const [job] = await claimJobs(deps.db, claimant, 1, deps.now(), leaseFrom(deps.now()));
   if (!job) return false;
   worker.running.add(job.id);
   const renewing = setInterval(() => void renewQuietly(worker, job), LEASE_MS / 3);
@@ -95,13 +96,8 @@ interface Task {
 }
 
 function taskOf(worker: WorkerContext, job: ClaimedJob): Task {
-  if (!isJobKind(job.kind)) return unknownTask(job.kind);
+  if (!isJobKind(job.kind)) throw new Error('a job was claimed whose kind has no handler');
   return bindTask(worker, job.kind, job.payload);
-}
-
-/** A newer release queued it; a newer worker will take it when this one has put it back. */
-function unknownTask(kind: string): Task {
-  return { run: () => Promise.reject(new Error(`no handler for ${kind}`)), giveUp: () => Promise.resolve() };
 }
 
 function bindTask<K extends JobKind>({ deps, handlers }: WorkerContext, kind: K, payload: object): Task {

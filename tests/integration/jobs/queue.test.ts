@@ -19,7 +19,7 @@ function queue(scoreId = services.deps.newId()) {
 
 function claim(workerId: string, limit: number) {
   const { deps } = services;
-  return claimJobs(deps.db, workerId, limit, deps.now(), new Date(deps.now().getTime() + MINUTE));
+  return claimJobs(deps.db, { workerId, kinds: ['read_score'] }, limit, deps.now(), new Date(deps.now().getTime() + MINUTE));
 }
 
 describe('claimJobs', () => {
