@@ -75,6 +75,8 @@ function addNote(draft: Draft, part: PartState, facts: NoteFacts, pitch: XmlElem
     draft.warn({ code: 'note_without_length', message: `Bar ${bar + 1} has a note of no length; it is left out.`, line: pitch.line, bar });
     return;
   }
+  // A chord note longer than the first of its chord is against the rules, but sounds.
+  draft.cursor.top = Math.max(draft.cursor.top, at + duration);
   if (part.graces.length > 0) attachGraces(part, voice, draft.notes.length);
   const sounding = transposePitch(readPitch(draft, pitch, bar), transpositionAt(part, staff) ?? AT_PITCH);
   draft.notes.push({ bar, part: part.index, at, duration, pitch: sounding, staff, voice, tieStart, tieStop });

@@ -31,6 +31,8 @@ export function mergeTies(draft: Draft, bars: readonly Bar[]): PlacedNote[] {
     const bar = bars[written.bar] as Bar;
     const start = bar.start + Math.min(written.at, bar.length);
     const duration = bar.start + endInBar(draft, written, bar) - start;
+    // A hair of a note at the end of a rounded bar is nothing.
+    if (duration <= 0) continue;
     const joined = written.tieStop ? takeOpen(open, written, start) : undefined;
     if (!written.tieStop) dropStruckAgain(open, written, start);
     const note = joined ? lengthen(joined, start, duration, index) : place(written, start, duration, index);
