@@ -224,13 +224,21 @@ const FIGURE_SIGNS: Readonly<Record<string, FigureSign>> = {
   n: 'natural',
 };
 
+/** Small figures pasted from a text are read like full-sized ones. */
+const SMALL_DIGITS: Readonly<Record<string, string>> = Object.fromEntries(
+  [...'⁰¹²³⁴⁵⁶⁷⁸⁹'].concat([...'₀₁₂₃₄₅₆₇₈₉']).map((digit, i) => [digit, String(i % 10)]),
+);
+const FIGURE = /([♭♯♮b#n]?)([\d⁰¹²³⁴-⁹₀-₉])/uy;
+const BEFORE_FIRST = /\s*(?=[♭♯♮b#n]?[\d⁰¹²³⁴-⁹₀-₉])/uy;
+const BETWEEN = /\s*[/\-–]?\s*(?=[♭♯♮b#n]?[\d⁰¹²³⁴-⁹₀-₉])/uy;
+
 /** Figures with or without a slash, a dash or a space between them. */
 function scanFigures(reader: Reader): Figure[] {
   const figures: Figure[] = [];
-  while (reader.take(figures.length > 0 ? /\s*[/\-–]?\s*(?=[♭♯♮b#n]?\d)/uy : /\s*(?=[♭♯♮b#n]?\d)/uy)) {
+  while (reader.take(figures.length > 0 ? BETWEEN : BEFORE_FIRST)) {
     const at = reader.at;
-    const [, sign = '', digit = ''] = reader.take(/([♭♯♮b#n]?)(\d)/uy) ?? [];
-    figures.push({ sign: FIGURE_SIGNS[sign] ?? '', digit, at });
+    const [, sign = '', digit = ''] = reader.take(FIGURE) ?? [];
+    figures.push({ sign: FIGURE_SIGNS[sign] ?? '', digit: SMALL_DIGITS[digit] ?? digit, at });
   }
   return figures;
 }
