@@ -3,8 +3,7 @@ import { PageHeader, Skeleton, SkeletonRows } from '@/components/ui';
 export default function LoadingLibrary() {
   return (
     <div className="sheet pb-16">
-      <PageHeader title="Library" subtitle="Scores, and the passages cut from them" />
-      <Skeleton className="mb-5 h-16" />
+      <PageHeader title="Library" />
       <Skeleton className="mb-6 h-28" />
       <SkeletonRows rows={8} label="Loading the library" />
     </div>

@@ -1,5 +1,5 @@
 import type { Metadata } from 'next';
-import { EmptyState, PageHeader, Pagination } from '@/components/ui';
+import { EmptyState, Pagination } from '@/components/ui';
 import { LIBRARY_PAGE_SIZE, type LibraryFacets, getLibraryFacets, listLibrary } from '@/db/queries/library';
 import { findLastStatements } from '@/db/queries/scores';
 import { canUseLibrary } from '@/lib/auth/permissions';
@@ -28,7 +28,6 @@ export default async function LibraryPage({ searchParams }: { readonly searchPar
   const excerpts = await listExcerptEntries(db, actor, rows.map(({ id }) => id));
   return (
     <div className="sheet pb-16">
-      <PageHeader title="Library" subtitle="Scores, and the passages cut from them" />
       <UploadArea lastStatements={lastStatements} inWork={rows.filter(({ state }) => isInWork(state)).map(({ id }) => id)}>
         {facets.total === 0 ? <EmptyLibrary /> : <LibraryFilters view={view} facets={facets} />}
         {facets.total > 0 && total === 0 ? <NothingFound /> : null}

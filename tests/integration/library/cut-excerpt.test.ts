@@ -10,7 +10,7 @@ import { cutExcerpt } from '@/lib/workflows/cut-excerpt';
 import { makeAnswerKey, startReading } from '@/lib/workflows/start-reading';
 import { readingOf } from '@/lib/workflows/stored-reading';
 import { uploadScore } from '@/lib/workflows/upload-score';
-import { musicXml } from '../../support/musicxml';
+import { musicXml } from '../../support/small-score';
 import { type TestServices, openServices } from '../../support/services';
 import { addPerson } from '../../support/world';
 import { WORDS, fileOf, readyScore, someone, workOff } from './library-world';

@@ -5,7 +5,7 @@ import { unwrap } from '@/lib/result';
 import type { Role } from '@/lib/vocabularies';
 import type { Deps } from '@/lib/workflows/deps';
 import { uploadScore } from '@/lib/workflows/upload-score';
-import { musicXml } from '../../support/musicxml';
+import { musicXml } from '../../support/small-score';
 import { addDepartment, addPerson } from '../../support/world';
 
 export const WORDS = { title: '', composer: '', work: '', source: 'Written by the tests', rights: 'Public domain' };

@@ -7,7 +7,7 @@ import { sha256Of } from '@/lib/storage/object-store';
 import { deleteScore, readScoreAgain, restoreScore } from '@/lib/workflows/change-score';
 import { getScoreFile } from '@/lib/workflows/get-score-file';
 import { uploadScore, uploadScoreInput } from '@/lib/workflows/upload-score';
-import { bombMxl, musicXml, mxlOf } from '../../support/musicxml';
+import { bombMxl, musicXml, mxlOf } from '../../support/small-score';
 import { type TestServices, openServices } from '../../support/services';
 import { WORDS, fileOf, readyScore, someone, workOff } from './library-world';
 

@@ -7,7 +7,7 @@ import { checkFile } from '@/components/library/check-file';
 import { UploadTray } from '@/components/library/upload-tray';
 import { usePolling } from '@/components/library/use-polling';
 import { type Statements, useUploads } from '@/components/library/use-uploads';
-import { Button, useAnnouncer } from '@/components/ui';
+import { Button, PageHeader, useAnnouncer } from '@/components/ui';
 import { type ScoreState, fetchScoreStates, isInWork } from './score-states';
 
 interface UploadAreaProps {
@@ -34,12 +34,17 @@ export function UploadArea({ lastStatements, inWork, children }: UploadAreaProps
           Let go to bring these files in
         </p>
       ) : null}
-      <div className="mb-5 flex flex-wrap items-center gap-x-4 gap-y-2 border border-dashed border-rule-strong px-4 py-3">
-        <Button kind="primary" onClick={open}>Upload scores</Button>
-        <p className="text-small text-ink-soft">
-          or drop MusicXML files anywhere on this page: .musicxml, .xml or .mxl, up to 10 MB each, several at once
-        </p>
-      </div>
+      <PageHeader
+        title="Library"
+        actions={
+          <>
+            <p id="drop-hint" className="text-small text-ink-soft sm:text-right">
+              Drop MusicXML files anywhere on this page,<br className="hidden sm:block" /> or choose them: .musicxml, .xml, .mxl, up to 10 MB each
+            </p>
+            <Button kind="primary" onClick={open} aria-describedby="drop-hint">Upload scores</Button>
+          </>
+        }
+      />
       <UploadTray uploads={uploads} dispatch={dispatch} statements={statements} onStatements={setStatements} />
       {children}
     </div>
