@@ -1,6 +1,6 @@
 import type { NextAuthOptions, Session } from 'next-auth';
 import type { JWT } from 'next-auth/jwt';
-import type { Provider } from 'next-auth/providers/index';
+import type { OAuthConfig, Provider } from 'next-auth/providers/index';
 import CredentialsProvider from 'next-auth/providers/credentials';
 import type { OidcConfig } from '@/lib/config';
 import { getConfig } from '@/lib/config';
@@ -87,6 +87,23 @@ interface OidcProfile {
   readonly email_verified?: boolean;
 }
 
+type UserinfoRequest = Parameters<NonNullable<Exclude<OAuthConfig<OidcProfile>['userinfo'], string | undefined>['request']>>[0];
+
+/** The claims of the ID token, which the client has verified. */
+function claimsOf(tokens: object): OidcProfile {
+  if (!('claims' in tokens) || typeof tokens.claims !== 'function') throw new Error('the provider sent no ID token');
+  return tokens.claims() as OidcProfile;
+}
+
+/** The e-mail may be in the ID token or, as OpenID Connect Core 5.4 has it, only at the UserInfo endpoint. */
+async function profileOf(tokens: UserinfoRequest['tokens'], client: UserinfoRequest['client']): Promise<OidcProfile> {
+  const claims = claimsOf(tokens);
+  if (claims.email || !tokens.access_token || !client.issuer.metadata.userinfo_endpoint) return claims;
+  const told = await client.userinfo<OidcProfile>(tokens.access_token);
+  if (told.sub !== claims.sub) throw new Error('the UserInfo is about someone else (OpenID Connect Core 5.3.2)');
+  return { ...told, ...claims };
+}
+
 function oidcProvider(oidc: OidcConfig): Provider {
   return {
     id: 'provider',
@@ -98,6 +115,7 @@ function oidcProvider(oidc: OidcConfig): Provider {
     clientSecret: oidc.clientSecret,
     authorization: { params: { scope: 'openid email profile' } },
     idToken: true,
+    userinfo: { request: ({ tokens, client }) => profileOf(tokens, client) },
     checks: ['pkce', 'state', 'nonce'],
     profile: (profile: OidcProfile) => ({ id: profile.sub }),
   };
