@@ -89,7 +89,7 @@ export async function changeRemark(deps: Deps, actor: Actor, input: z.infer<type
   const remark = await unsafeFindRemark(deps.db, input.readingId, input.remarkId);
   if (!remark) return err(appError('not_found'));
   if (input.body !== undefined && !(await updateRemarkBody(deps.db, remark.id, actor.userId, input.body))) return err(appError('not_found'));
-  if (input.resolved !== undefined) await setRemarkResolved(deps.db, remark.id, ...(input.resolved ? ([deps.now(), actor.userId] as const) : ([null, null] as const)));
+  if (input.resolved !== undefined) await setRemarkResolved(deps.db, remark.id, input.resolved ? deps.now() : null, input.resolved ? actor.userId : null);
   return ok(await allRemarks(deps, actor, input.readingId, true));
 }
 

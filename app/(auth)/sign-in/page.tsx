@@ -1,6 +1,6 @@
 import type { Metadata } from 'next';
 import { redirect } from 'next/navigation';
-import { getConfig } from '@/lib/config';
+import { getProviderName } from '@/lib/http/provider-name';
 import { safePath } from '@/lib/http/safe-path';
 import { getActor } from '@/lib/http/visitor';
 import { SignInForm } from './_components/sign-in-form';
@@ -18,7 +18,7 @@ export default async function SignInPage({ searchParams }: SignInPageProps) {
   return (
     <>
       <h1 className="mb-5 text-title">Sign in</h1>
-      <SignInForm next={next} providerName={getConfig().oidc?.name ?? null} startError={error ?? null} />
+      <SignInForm next={next} providerName={getProviderName()} startError={error ?? null} />
     </>
   );
 }

@@ -1,9 +1,8 @@
 import type { Metadata } from 'next';
 import Link from 'next/link';
 import { WarningNote } from '@/components/ui';
-import { unsafeFindInvitationByToken } from '@/db/queries/members';
-import { hashToken } from '@/lib/auth/token';
 import { createDeps } from '@/lib/workflows/deps';
+import { findInvitation } from '@/lib/workflows/find-invitation';
 import { AcceptForm } from './_components/accept-form';
 
 export const metadata: Metadata = { title: 'Invitation' };
@@ -12,8 +11,7 @@ const AS = { owner: 'an owner', instructor: 'an instructor', assistant: 'an assi
 
 export default async function InvitationPage({ params }: { readonly params: Promise<{ readonly token: string }> }) {
   const { token } = await params;
-  const deps = createDeps();
-  const invitation = await unsafeFindInvitationByToken(deps.db, hashToken(token), deps.now());
+  const invitation = await findInvitation(createDeps(), token);
   if (!invitation) return <NoInvitation />;
   const { departmentName, courseTitle, role, email, invitedBy } = invitation;
   return (
