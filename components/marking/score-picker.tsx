@@ -1,5 +1,6 @@
 'use client';
 
+import '@/components/score/score.css';
 import { type KeyboardEvent, useMemo } from 'react';
 import { Button, ErrorNote, Skeleton } from '@/components/ui';
 import { describeLabel } from '@/components/reading/label-words';
@@ -27,6 +28,9 @@ interface ScorePickerProps {
   /** Enter or a double click on a label. */
   onToggle?(labelId: string): void;
 }
+
+/** Small enough for whole phrases, large enough to read the numerals. */
+const ZOOM = 0.75;
 
 /** The score with a reading under it, to choose labels on: by mouse, or with the arrow keys and Enter. */
 export function ScorePicker(props: ScorePickerProps) {
@@ -59,7 +63,7 @@ function LoadedPicker({ xml, score, reading, sheet, currentId, marks, givenIds, 
         score={score}
         firstBar={firstBar}
         lastBar={lastBar}
-        zoom={1}
+        zoom={ZOOM}
         heldTick={current?.start ?? 0}
         underlay={() => null}
         overlay={(geometry) => (

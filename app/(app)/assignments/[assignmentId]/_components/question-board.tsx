@@ -2,7 +2,7 @@
 
 import { useMemo, useState } from 'react';
 import { ScorePicker } from '@/components/marking/score-picker';
-import { Button, WarningNote } from '@/components/ui';
+import { Button, Mark, WarningNote } from '@/components/ui';
 import type { LabelMark } from '@/components/score/lanes';
 import type { Label, Reading } from '@/lib/harmony/reading';
 import type { KeyLabel } from '@/lib/marking/key-reading';
@@ -41,6 +41,7 @@ export function QuestionBoard({ assignment, keyLabels, reading, keyReadingId, fi
       {fixed && mayChange ? <WarningNote>Students have begun: which spans are asked is fixed. Points and alternatives can still change; marks are brought up to date under “Mark”.</WarningNote> : null}
       <div className="flex flex-wrap items-center gap-x-4 gap-y-2">
         <p aria-live="polite"><strong className="font-medium">{questions.size}</strong> of {withNumeral.length} labels asked, {formatPoints(sumOf(questions, assignment))} points{saving ? ', saving …' : ''}</p>
+        <p className="flex gap-4 text-small"><Mark tone="settled" shape="disc">asked</Mark><Mark tone="plain" shape="dash">not asked</Mark></p>
         {fixed ? null : (
           <span className="flex flex-wrap gap-2">
             <Button size="small" onClick={() => askOnly(withNumeral.map((label) => label.start))}>Ask all</Button>
@@ -84,7 +85,7 @@ export function QuestionBoard({ assignment, keyLabels, reading, keyReadingId, fi
 
 function marksOf(reading: Reading, questions: Questions): ReadonlyMap<string, LabelMark> {
   const markOf = (label: Label): LabelMark =>
-    questions.has(label.start) ? { shape: 'disc', tone: 'settled', note: 'asked' } : { shape: 'dash', tone: 'plain' };
+    questions.has(label.start) ? { shape: 'disc', tone: 'settled' } : { shape: 'dash', tone: 'plain' };
   return new Map(reading.labels.map((label) => [label.id, markOf(label)]));
 }
 

@@ -61,7 +61,7 @@ function Dates({ assignment, now }: { readonly assignment: Assignment; readonly 
     ...(closesAt ? [{ term: 'Closes', value: <LocalTime at={closesAt.toISOString()} /> }] : []),
     { term: 'Attempts', value: attempts === 1 ? 'one' : `up to ${attempts}; the last one counts` },
   ];
-  return <Facts facts={facts} />;
+  return <div><Facts facts={facts} /></div>;
 }
 
 function Attempts({ submissions, dueAt }: { readonly submissions: readonly Submission[]; readonly dueAt: Date | null }) {
