@@ -133,7 +133,7 @@ function insertionText(xml: string, anchor: PlacedAnchor, annotation: Annotation
     ...(annotation.alternatives ?? []).flatMap((other: KeyedNumeral) => harmonyLines(other, { ...place, type: 'alternate', showKey: false })),
   ];
   const { indent, newline } = layoutBefore(xml, anchor.at);
-  return lines.map((line) => `${line}${newline}${indent}`).join('');
+  return lines.map((line) => (newline === '' ? line.trim() : `${line}${newline}${indent}`)).join('');
 }
 
 /** The file's own line ends and indentation; everything on one line where the file has no lines. */
