@@ -20,16 +20,19 @@ export function ReadingTable({ excerptId, excerptTitle, readings, ownId }: Readi
           <Th>Reading</Th>
           <Th>Settled</Th>
           <Th className="hidden md:table-cell">Last change</Th>
-          <Th><span className="sr-only">Actions</span></Th>
+          <Th className="hidden sm:table-cell"><span className="sr-only">Actions</span></Th>
         </Row>
       </thead>
       <tbody>
         {readings.map((reading) => (
           <Row key={reading.id}>
-            <Th scope="row"><ReadingName reading={reading} isOwn={reading.ownerId === ownId} /></Th>
+            <Th scope="row">
+              <ReadingName reading={reading} isOwn={reading.ownerId === ownId} />
+              <div className="mt-1.5 font-normal sm:hidden"><ReadingActions excerptId={excerptId} excerptTitle={excerptTitle} reading={reading} ownId={ownId} /></div>
+            </Th>
             <Td><Settled reading={reading} /></Td>
             <Td className="hidden text-small text-ink-soft md:table-cell"><DateText date={reading.updatedAt} withTime /></Td>
-            <Td className="py-1.5 text-right"><ReadingActions excerptId={excerptId} excerptTitle={excerptTitle} reading={reading} ownId={ownId} /></Td>
+            <Td className="hidden py-1.5 sm:table-cell"><ReadingActions excerptId={excerptId} excerptTitle={excerptTitle} reading={reading} ownId={ownId} /></Td>
           </Row>
         ))}
       </tbody>
@@ -76,7 +79,7 @@ function ReadingActions({ excerptId, excerptTitle, reading, ownId }: ReadingActi
   if (state === 'proposing') return null;
   if (state === 'failed') return <ProposeAgain excerptId={excerptId} />;
   return (
-    <div className="flex flex-wrap justify-end gap-1.5">
+    <div className="flex flex-wrap gap-1.5 sm:justify-end">
       {ownerId === ownId ? null : <StartReading small excerptId={excerptId} basedOn={id}>Start mine from this</StartReading>}
       {kind === 'person' ? <MakeKey excerptId={excerptId} excerptTitle={excerptTitle} reading={{ id, title, open: labelCount - settledCount }} /> : null}
       <ButtonLink size="small" href={`/handouts/${id}`} aria-label={`Hand out: ${title}`}>Hand out</ButtonLink>
