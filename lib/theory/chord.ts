@@ -78,10 +78,15 @@ export function isAugmentedSixth(quality: Quality): boolean {
 const TRIADS: Readonly<Record<string, Triad>> = { '4,1': 'major', '-3,1': 'minor', '-3,-6': 'diminished', '4,8': 'augmented' };
 const SEVENTHS: Readonly<Record<number, SeventhSize>> = { 5: 'major', [-2]: 'minor', [-9]: 'diminished' };
 
+/** The triad of a third and a fifth, each a distance from the root on the line of fifths; null when they make none. */
+export function findTriad(third: number | undefined, fifth: number | undefined): Triad | null {
+  return TRIADS[`${third},${fifth}`] ?? null;
+}
+
 /** The triad under the chord; null for augmented sixths and `other`. */
 export function triadOf(quality: Quality): Triad | null {
-  if (isAugmentedSixth(quality)) return null;
-  return TRIADS[TEMPLATES[quality].slice(1, 3).join(',')] ?? null;
+  const [, third, fifth] = TEMPLATES[quality];
+  return isAugmentedSixth(quality) ? null : findTriad(third, fifth);
 }
 
 /** The seventh over the root; null where there is none, and for augmented sixths and `other`. */

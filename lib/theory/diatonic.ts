@@ -1,4 +1,4 @@
-import { type Quality, type SeventhSize, type Triad, findSeventhChord } from './chord';
+import { type Quality, type SeventhSize, type Triad, findSeventhChord, findTriad } from './chord';
 import type { ConventionSheet } from './conventions';
 import { type Degree, type Mode, SCALE_FIFTHS, type Step } from './key';
 
@@ -26,15 +26,13 @@ export function keyToneAbove(mode: Mode, degree: Degree, above: number): number 
   return scaleTone(modeOfRoot(mode, degree), degree.step + above) - root;
 }
 
-const TRIAD_OF_TONES: Readonly<Record<string, Triad>> = { '4,1': 'major', '-3,1': 'minor', '-3,-6': 'diminished', '4,8': 'augmented' };
-
 /**
  * The triad that a key has on a degree when nothing is marked: diatonic, with the raised leading tone in minor's V
  * (VII stays on the subtonic); on an altered root, major.
  */
 export function plainTriad(mode: Mode, degree: Degree): Triad {
   if (degree.alter !== 0 || (mode === 'minor' && degree.step === 5)) return 'major';
-  return TRIAD_OF_TONES[`${keyToneAbove(mode, degree, 2)},${keyToneAbove(mode, degree, 4)}`] ?? 'major';
+  return findTriad(keyToneAbove(mode, degree, 2), keyToneAbove(mode, degree, 4)) ?? 'major';
 }
 
 /**
