@@ -20,6 +20,10 @@ export function rational(num: number, den = 1): Rational {
   return { num: num / divisor, den: den / divisor };
 }
 
+export function add(a: Rational, b: Rational): Rational {
+  return rational(a.num * b.den + b.num * a.den, a.den * b.den);
+}
+
 /** Reads `12`, `-3`, `0.25`, `.5`, with at most nine digits on either side; undefined for anything else. */
 export function parseDecimal(text: string): Rational | undefined {
   const match = /^([+-]?)(\d{0,9})(?:\.(\d{0,9}))?$/.exec(text.trim());
