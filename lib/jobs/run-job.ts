@@ -10,8 +10,8 @@ import { formatFailure, retryAfter } from './retry';
  */
 export interface JobHandler<P> {
   run(deps: Deps, payload: P): Promise<void>;
-  /** After the last try: says so where people look for the outcome. */
-  giveUp(deps: Deps, payload: P): Promise<void>;
+  /** After the last try, with what it threw: says so where people look for the outcome. */
+  giveUp(deps: Deps, payload: P, thrown: unknown): Promise<void>;
 }
 
 export type JobHandlers = { readonly [K in JobKind]: JobHandler<JobPayload<K>> };
@@ -77,14 +77,14 @@ async function doJob(worker: WorkerContext, job: ClaimedJob): Promise<void> {
 async function putBack(worker: WorkerContext, job: ClaimedJob, error: unknown, isLast: boolean): Promise<void> {
   const { deps, id } = worker;
   if (!isLast) return retryJob(deps.db, job.id, id, formatFailure(error), retryAfter(job.attempt, deps.now()));
-  await giveUpQuietly(worker, job);
+  await giveUpQuietly(worker, job, error);
   await buryJob(deps.db, job.id, id, formatFailure(error), deps.now());
 }
 
 /** A job that cannot even be given up is buried all the same: it must not come back for ever. */
-async function giveUpQuietly(worker: WorkerContext, job: ClaimedJob): Promise<void> {
+async function giveUpQuietly(worker: WorkerContext, job: ClaimedJob, thrown: unknown): Promise<void> {
   try {
-    await taskOf(worker, job).giveUp();
+    await taskOf(worker, job).giveUp(thrown);
   } catch (error) {
     worker.deps.log.error({ jobId: job.id, jobKind: job.kind, ...describeError(error) }, 'giving a job up failed');
   }
@@ -92,7 +92,7 @@ async function giveUpQuietly(worker: WorkerContext, job: ClaimedJob): Promise<vo
 
 interface Task {
   run(): Promise<void>;
-  giveUp(): Promise<void>;
+  giveUp(thrown: unknown): Promise<void>;
 }
 
 function taskOf(worker: WorkerContext, job: ClaimedJob): Task {
@@ -103,5 +103,5 @@ function taskOf(worker: WorkerContext, job: ClaimedJob): Task {
 function bindTask<K extends JobKind>({ deps, handlers }: WorkerContext, kind: K, payload: object): Task {
   const handler: JobHandler<JobPayload<K>> = handlers[kind];
   const parse = () => JOB_PAYLOADS[kind].parse(payload) as JobPayload<K>;
-  return { run: async () => handler.run(deps, parse()), giveUp: async () => handler.giveUp(deps, parse()) };
+  return { run: async () => handler.run(deps, parse()), giveUp: async (thrown) => handler.giveUp(deps, parse(), thrown) };
 }

@@ -17,6 +17,15 @@ const GIVEN_UP: Refusal = {
   message: 'Reading this file failed on our side, several times. The file is kept; try again later, or export it anew.',
 };
 
+/** The reader ran into a bound that a busy machine may be to blame for: worth another try. */
+class ReadingStopped extends Error {
+  override readonly name = 'ReadingStopped';
+
+  constructor(readonly refusal: Refusal) {
+    super(refusal.code);
+  }
+}
+
 /** The job of an uploaded score: its file is read, and the row says what is in it or why it was refused. */
 export async function readStoredScore(deps: Deps, { scoreId }: { scoreId: string }): Promise<void> {
   const file = await unsafeFindScoreFile(deps.db, scoreId);
@@ -28,17 +37,19 @@ export async function readStoredScore(deps: Deps, { scoreId }: { scoreId: string
 }
 
 /** After the last try. */
-export async function giveUpScore(deps: Deps, { scoreId }: { scoreId: string }): Promise<void> {
+export async function giveUpScore(deps: Deps, { scoreId }: { scoreId: string }, thrown: unknown): Promise<void> {
   const file = await unsafeFindScoreFile(deps.db, scoreId);
   if (!file || file.state === 'ready') return;
-  await refuseScore(deps, scoreId, GIVEN_UP);
+  await refuseScore(deps, scoreId, thrown instanceof ReadingStopped ? thrown.refusal : GIVEN_UP);
 }
 
 async function readFile(deps: Deps, file: ScoreFile): Promise<ScoreFacts | Refusal> {
   const bytes = await deps.storage.get(file.sha256);
   if (!bytes) return GONE;
   const read = await readInThread(bytes);
-  return read.ok ? read.value : read.error;
+  if (read.ok) return read.value;
+  if (read.error.code === 'timed_out') throw new ReadingStopped(read.error);
+  return read.error;
 }
 
 /** The file's own words fill what its uploader left empty; a title taken from the file's name gives way to the file's own. */
