@@ -69,7 +69,8 @@ function resolve(note: Note, tendency: Tendency, span: TendencySpan): { went: No
   const at = line.findIndex(goesWell);
   const found = line[at];
   const within = line.filter((next) => next.start < span.end).length;
-  if (found) return { went: found, resolution: at <= within || within > 0 ? 'as-expected' : 'delayed' };
+  const isPrompt = within > 0 || (at === 0 && found !== undefined && found.start <= span.end);
+  if (found) return { went: found, resolution: isPrompt ? 'as-expected' : 'delayed' };
   const elsewhere = findElsewhere(note, tendency, span);
   if (elsewhere) return { went: elsewhere, resolution: 'in-another-voice' };
   const next = line[within];
