@@ -1,4 +1,4 @@
-import { z } from 'zod';
+import type { z } from 'zod';
 import { databaseErrorCode } from '@/db/client';
 import type { Actor, Visitor } from '@/lib/auth/actor';
 import { type AppError, appError, messageOf } from '@/lib/errors';

@@ -3,6 +3,7 @@
 import Link from 'next/link';
 import { signIn } from 'next-auth/react';
 import { useState } from 'react';
+import { loadPage } from '@/app/_components/load-page';
 import { useSubmit } from '@/app/_components/use-submit';
 import { Button, ErrorNote, Field, Input, SettledNote } from '@/components/ui';
 import { savePassword } from '../actions';
@@ -45,7 +46,7 @@ export function PasswordForm({ email, hasPassword, fresh }: PasswordFormProps) {
 /** The change ended this session as well: begin a new one, or else go and sign in. */
 async function enterAgain(email: string, password: string): Promise<void> {
   const answer = await signIn('password', { email, password, redirect: false }).catch(() => undefined);
-  if (!answer?.ok) window.location.assign('/sign-in');
+  if (!answer?.ok) loadPage('/sign-in');
 }
 
 function LinkFirst() {

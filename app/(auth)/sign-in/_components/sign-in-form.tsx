@@ -2,6 +2,7 @@
 
 import Link from 'next/link';
 import { signIn } from 'next-auth/react';
+import { loadPage } from '@/app/_components/load-page';
 import { useSubmit } from '@/app/_components/use-submit';
 import { Button, ErrorNote, Field, Input } from '@/components/ui';
 import { signInErrorMessage } from '@/lib/http/sign-in-error';
@@ -19,7 +20,7 @@ interface SignInFormProps {
 export function SignInForm({ next, providerName, startError }: SignInFormProps) {
   const { outcome, busy, failure, form } = useSubmit(
     (_previous, data) => enter('password', { email: String(data.get('email')), password: String(data.get('password')) }),
-    () => window.location.assign(next),
+    () => loadPage(next),
   );
   const error = outcome ? failure : startError && signInErrorMessage(startError);
   return (

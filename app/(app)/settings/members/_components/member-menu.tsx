@@ -1,6 +1,7 @@
 'use client';
 
 import { useState } from 'react';
+import { loadPage } from '@/app/_components/load-page';
 import { Button, Confirm, Menu, MenuAction, MenuRule } from '@/components/ui';
 import { erase, remove } from '../actions';
 import type { MemberRow } from './member-table';
@@ -11,7 +12,7 @@ type Asked = 'remove' | 'erase' | null;
 /** What an owner can do with a member beside the role. */
 export function MemberMenu({ member, own }: { readonly member: MemberRow; readonly own: boolean }) {
   const [asked, setAsked] = useState<Asked>(null);
-  const download = () => window.location.assign(`/settings/members/${member.userId}/export`);
+  const download = () => loadPage(`/settings/members/${member.userId}/export`);
   return (
     <>
       <Menu trigger={<Button kind="quiet" size="small" aria-label={`More about ${member.name}`}>More</Button>}>

@@ -1,6 +1,7 @@
 'use client';
 
 import { signIn } from 'next-auth/react';
+import { loadPage } from '@/app/_components/load-page';
 import { type Sent, useSubmit } from '@/app/_components/use-submit';
 import { Button, ErrorNote, Field, Input } from '@/components/ui';
 import { accept } from '../actions';
@@ -15,7 +16,7 @@ interface AcceptFormProps {
 /** Someone new is signed in at once; someone known goes to sign in as they always do. */
 async function enter({ email, known }: { readonly email: string; readonly known: boolean }, { data }: Sent): Promise<void> {
   const answer = known ? null : await signIn('password', { email, password: data.get('password'), redirect: false });
-  window.location.assign(answer?.ok ? '/' : '/sign-in');
+  loadPage(answer?.ok ? '/' : '/sign-in');
 }
 
 export function AcceptForm({ token, email, known }: AcceptFormProps) {

@@ -1,5 +1,6 @@
 'use client';
 
+import { loadPage } from '@/app/_components/load-page';
 import { useSubmit } from '@/app/_components/use-submit';
 import { Button, ErrorNote } from '@/components/ui';
 import { enter } from '../../_components/enter';
@@ -7,7 +8,7 @@ import { enter } from '../../_components/enter';
 export function UseLinkForm({ token }: { readonly token: string }) {
   const { outcome, busy, failure, form } = useSubmit(
     () => enter('link', { token }),
-    () => window.location.assign('/'),
+    () => loadPage('/'),
   );
   return (
     <form {...form} className="flex flex-col gap-4">
