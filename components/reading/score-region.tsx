@@ -1,6 +1,6 @@
 'use client';
 
-import { useCallback, useEffect, useMemo, useRef } from 'react';
+import { useCallback, useEffect, useMemo, useRef, useState } from 'react';
 import { BoundaryGrip } from '@/components/score/boundary-grip';
 import type { SheetGeometry } from '@/components/score/geometry';
 import { Lanes } from '@/components/score/lanes';
@@ -36,6 +36,7 @@ export function ScoreRegion(props: ScoreRegionProps) {
   const { xml, score, firstBar, lastBar, sheet, desk } = props;
   const { state } = desk.context;
   const region = useRef<HTMLDivElement>(null);
+  const [tables, setTables] = useState(false);
   const label = getSelected(state);
   useFocusFollows(region, label.id, desk.opened.kind);
 
@@ -54,9 +55,9 @@ export function ScoreRegion(props: ScoreRegionProps) {
           overlay={(geometry) => <Overlay {...props} geometry={geometry} />}
         />
       </div>
-      <details className="border-t border-rule p-4">
+      <details className="border-t border-rule p-4" onToggle={(event) => setTables(event.currentTarget.open)}>
         <summary className="caps text-small text-ink-soft">The score as tables</summary>
-        <ScoreTable score={score} firstBar={firstBar} lastBar={lastBar} reading={state.reading} sheet={sheet} />
+        {tables ? <ScoreTable score={score} firstBar={firstBar} lastBar={lastBar} reading={state.reading} sheet={sheet} /> : null}
       </details>
     </div>
   );

@@ -48,6 +48,7 @@ export function Lanes(props: LanesProps) {
   const faces = useMemo(() => facesOf(labels, sheet), [labels, sheet]);
   const model = useMemo(() => layLabels(geometry, labels, (label) => faceWidth(faces.get(label.id) ?? null)), [geometry, labels, faces]);
   const { describe, onSelect, onOpen } = props;
+  const words = useMemo(() => new Map(labels.map((label) => [label.id, describe(label)])), [labels, describe]);
 
   return (
     <div className="absolute inset-0">
@@ -59,7 +60,7 @@ export function Lanes(props: LanesProps) {
           label={placed.label}
           {...position(geometry, placed)}
           face={faces.get(placed.label.id) ?? null}
-          words={describe(placed.label)}
+          words={words.get(placed.label.id) ?? ''}
           current={placed.label.id === props.currentId}
           selected={props.selectedIds.has(placed.label.id)}
           given={props.givenIds?.has(placed.label.id) ?? false}
