@@ -63,7 +63,7 @@ interface MarkProps {
 /** Shape, word and colour for a state that is not in STATES: a verdict, a kind of warning. */
 export function Mark({ tone, shape, children, iconOnly = false, className }: MarkProps) {
   return (
-    <span className={classNames('inline-flex items-baseline gap-1.5 whitespace-nowrap', TONE_TEXT[tone], className)}>
+    <span className={classNames('inline-flex items-baseline gap-1.5 sm:whitespace-nowrap', TONE_TEXT[tone], className)}>
       <ShapeIcon shape={shape} className="translate-y-[0.05em]" />
       <span className={iconOnly ? 'sr-only' : undefined}>{children}</span>
     </span>

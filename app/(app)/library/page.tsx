@@ -11,8 +11,9 @@ import { Filters } from './_components/filters';
 import { LibraryTable } from './_components/library-table';
 import { isInWork } from './_components/score-states';
 import { UploadArea } from './_components/upload-area';
+import { hrefOf, isNarrowed } from './address';
 import { listExcerptEntries } from './entries';
-import { type LibraryQuery, type SearchParams, filterOf, hrefOf, isNarrowed, parseLibraryQuery } from './filter';
+import { type LibraryQuery, type SearchParams, filterOf, parseLibraryQuery } from './filter';
 
 export const metadata: Metadata = { title: 'Library' };
 
@@ -45,7 +46,6 @@ function LibraryFilters({ view, facets }: { readonly view: LibraryQuery; readonl
   }));
   return (
     <Filters
-      key={hrefOf({ ...view, q: '' }, {})}
       view={view}
       narrowed={isNarrowed(view)}
       composers={facets.composers.map(({ composer, n }) => ({ value: composer, label: `${composer} (${n})` }))}

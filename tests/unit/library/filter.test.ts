@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest';
-import { filterOf, hrefOf, isNarrowed, parseLibraryQuery, sortHref } from '@/app/(app)/library/filter';
+import { hrefOf, isNarrowed, sortHref } from '@/app/(app)/library/address';
+import { filterOf, parseLibraryQuery } from '@/app/(app)/library/filter';
 
 const EMPTY = parseLibraryQuery({});
 

@@ -1,10 +1,9 @@
 'use client';
 
-import Form from 'next/form';
 import Link from 'next/link';
-import { useRef } from 'react';
 import { Checkbox, Field, Input, Select } from '@/components/ui';
 import type { LibraryQuery } from '../filter';
+import { type Facets, useFilterDraft } from './use-filter-draft';
 
 export interface Choice {
   readonly value: string;
@@ -19,8 +18,6 @@ interface FiltersProps {
   readonly people: readonly Choice[];
 }
 
-const TYPING_PAUSE_MS = 350;
-
 const STATES: readonly Choice[] = [
   { value: 'ready', label: 'ready' },
   { value: 'uncut', label: 'ready, no excerpt yet' },
@@ -28,53 +25,46 @@ const STATES: readonly Choice[] = [
   { value: 'refused', label: 'refused' },
 ];
 
-/** Search and facets. A plain form with an address of its own; it sends itself as soon as something changes. */
+/** Search and facets. Every view has an address, which follows the controls. */
 export function Filters({ view, narrowed, composers, keys, people }: FiltersProps) {
-  const form = useRef<HTMLFormElement>(null);
-  const timer = useRef<ReturnType<typeof setTimeout>>(undefined);
-  const send = (pause = 0) => {
-    clearTimeout(timer.current);
-    timer.current = setTimeout(() => form.current?.requestSubmit(), pause);
-  };
+  const { draft, change } = useFilterDraft(view);
+  const facet = (name: Exclude<keyof Facets, 'q' | 'diminished'>, choices: readonly Choice[]) => ({
+    value: draft[name],
+    choices,
+    onChoose: (value: string | null) => change({ [name]: value }),
+  });
   return (
-    <Form ref={form} action="/library" role="search" aria-label="Library" scroll={false} className="mb-4 grid grid-cols-2 gap-x-4 gap-y-3 lg:grid-cols-[minmax(0,1.6fr)_repeat(4,minmax(0,1fr))]">
-      {view.sort === 'added' ? null : <input type="hidden" name="sort" value={view.sort} />}
-      {view.order ? <input type="hidden" name="order" value={view.order} /> : null}
+    <form action="/library" role="search" aria-label="Library" onSubmit={(event) => event.preventDefault()} className="mb-4 grid grid-cols-2 gap-x-4 gap-y-3 lg:grid-cols-[minmax(0,1.6fr)_repeat(4,minmax(0,1fr))]">
       <Field label="Search" className="col-span-2 lg:col-span-1">
-        <Input type="search" name="q" defaultValue={view.q} placeholder="Title, composer, work, purpose" onChange={() => send(TYPING_PAUSE_MS)} />
+        <Input type="search" value={draft.q} maxLength={200} placeholder="Title, composer, work, purpose" onChange={(event) => change({ q: event.target.value }, 'typing')} />
       </Field>
-      <Facet label="Composer" name="composer" value={view.composer} choices={composers} onChange={send} />
-      <Facet label="Begins in" name="key" value={view.key} choices={keys} onChange={send} />
-      <Facet label="State" name="state" value={view.state} choices={STATES} onChange={send} />
-      <Facet label="Brought in by" name="by" value={view.by} choices={people} onChange={send} />
+      <Facet label="Composer" {...facet('composer', composers)} />
+      <Facet label="Begins in" {...facet('key', keys)} />
+      <Facet label="State" {...facet('state', STATES)} />
+      <Facet label="Brought in by" {...facet('by', people)} />
       <div className="col-span-full flex flex-wrap items-center justify-between gap-x-6">
         <Checkbox
-          name="diminished"
-          value="1"
-          defaultChecked={view.diminished !== null}
-          onChange={() => send()}
+          checked={draft.diminished !== null}
+          onChange={(event) => change({ diminished: event.target.checked ? '1' : null })}
           label="Only with secondary diminished or half-diminished sevenths"
         />
         {narrowed ? <Link href="/library" className="link min-h-6 content-center text-small">Show the whole library</Link> : null}
-        <noscript><button type="submit" className="link">Search</button></noscript>
       </div>
-    </Form>
+    </form>
   );
 }
 
 interface FacetProps {
   readonly label: string;
-  readonly name: string;
   readonly value: string | null;
   readonly choices: readonly Choice[];
-  readonly onChange: () => void;
+  readonly onChoose: (value: string | null) => void;
 }
 
-/** Unset, the select sends an empty value, which the address leaves aside when it is read. */
-function Facet({ label, name, value, choices, onChange }: FacetProps) {
+function Facet({ label, value, choices, onChoose }: FacetProps) {
   return (
     <Field label={label}>
-      <Select name={name} defaultValue={value ?? ''} onChange={() => onChange()}>
+      <Select value={value ?? ''} onChange={(event) => onChoose(event.target.value || null)}>
         <option value="">any</option>
         {choices.map((choice) => <option key={choice.value} value={choice.value}>{choice.label}</option>)}
       </Select>

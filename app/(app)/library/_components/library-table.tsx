@@ -1,8 +1,9 @@
 import Link from 'next/link';
 import { Row, SortTh, Table, Th } from '@/components/ui';
 import type { LibraryRow, LibrarySort } from '@/db/queries/library';
+import { isDescending, sortHref } from '../address';
 import type { ExcerptEntry } from '../entries';
-import { type LibraryQuery, isDescending, sortHref } from '../filter';
+import type { LibraryQuery } from '../filter';
 import { ScoreRows } from './score-rows';
 
 interface LibraryTableProps {

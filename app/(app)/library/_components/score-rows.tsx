@@ -65,12 +65,12 @@ function ExcerptRow({ excerpt }: { readonly excerpt: ExcerptEntry }) {
   return (
     <Row className="border-rule/60">
       <Th scope="row" className="max-w-lg font-normal">
-        <div className="flex items-baseline gap-2 pl-4 sm:pl-7">
+        <div className="flex items-baseline gap-2 sm:pl-7">
           <Bracket />
           <div className="min-w-0">
             <Link href={`/excerpts/${excerpt.id}`} className="link">{excerpt.title}</Link>
             <span className="text-small whitespace-nowrap text-ink-soft">, bars {excerpt.bars}</span>
-            {excerpt.hasSecondaryDiminished ? <Tag className="ml-2">Secondary diminished</Tag> : null}
+            {excerpt.hasSecondaryDiminished ? <Tag className="ml-2">Secondary °7</Tag> : null}
             {excerpt.purpose ? <p className="line-clamp-1 text-small text-ink-soft italic">{excerpt.purpose}</p> : null}
           </div>
         </div>
