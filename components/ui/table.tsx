@@ -12,7 +12,7 @@ interface TableProps {
 /** A ruled table that scrolls sideways within its own region when the page is narrow. */
 export function Table({ caption, captionShown = false, className, children }: TableProps) {
   return (
-    <div className="overflow-x-auto" role="region" aria-label={typeof caption === 'string' ? caption : undefined} tabIndex={0}>
+    <div className="relative overflow-x-auto" role="region" aria-label={typeof caption === 'string' ? caption : undefined} tabIndex={0}>
       <table className={classNames('w-full border-collapse border-y border-rule-strong text-base', className)}>
         <caption className={captionShown ? 'caps pb-1 text-left text-small text-ink-soft' : 'sr-only'}>{caption}</caption>
         {children}
