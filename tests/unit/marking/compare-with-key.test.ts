@@ -110,6 +110,12 @@ describe('compareWithKey on six-fours', () => {
 
   it('tells a passing six-four from a cadential one', () => {
     // Source: Integrated Musicianship: Theory, ch. 11d: one label for cadential and passing six-fours confuses.
+    expect(errors1('C: I64(pass)', 'C: Cad64')).toContain('six-four');
+    expect(mark1('C: I64(pass)', 'C: Cad64')).toBe('partly 1.5');
+    expect(mark1('C: I64(pass)', 'C: I64')).toBe('as-keyed 2');
+  });
+
+  it('knows a six-four that was overlooked', () => {
     expect(errors1('C: Cad64 V7', 'C: V V7')).toContain('six-four');
     expect(errors1('C: Cad64 V7', 'C: ii6 V7')).toContain('six-four');
   });

@@ -1,7 +1,7 @@
 'use client';
 
 import { useRouter } from 'next/navigation';
-import { useState } from 'react';
+import { useState, useTransition } from 'react';
 import { useSubmit } from '@/app/_components/use-submit';
 import { Button, Dialog, DialogActions, ErrorNote } from '@/components/ui';
 import { create } from '../actions';
@@ -9,8 +9,9 @@ import { CourseFields } from './course-fields';
 
 export function NewCourse() {
   const router = useRouter();
+  const [leaving, leave] = useTransition();
   const [open, setOpen] = useState(false);
-  const { busy, fields, failure, onSubmit } = useSubmit(create, ({ courseId }) => router.push(`/courses/${courseId}`));
+  const { busy, fields, failure, onSubmit } = useSubmit(create, ({ courseId }) => leave(() => router.push(`/courses/${courseId}`)));
   return (
     <>
       <Button kind="primary" onClick={() => setOpen(true)}>New course</Button>
@@ -20,7 +21,7 @@ export function NewCourse() {
           <CourseFields fields={fields} />
           <DialogActions>
             <Button onClick={() => setOpen(false)}>Not now</Button>
-            <Button type="submit" kind="primary" busy={busy} busyText="Opening …">Open the course</Button>
+            <Button type="submit" kind="primary" busy={busy || leaving} busyText="Opening …">Open the course</Button>
           </DialogActions>
         </form>
       </Dialog>

@@ -1,7 +1,7 @@
 'use client';
 
 import { useRouter } from 'next/navigation';
-import { useState } from 'react';
+import { useState, useTransition } from 'react';
 import { Button, useAnnouncer } from '@/components/ui';
 import { start } from '../../../submissions/actions';
 
@@ -9,15 +9,16 @@ export function BeginButton({ assignmentId, again }: { readonly assignmentId: st
   const router = useRouter();
   const { warn } = useAnnouncer();
   const [busy, setBusy] = useState(false);
+  const [leaving, leave] = useTransition();
   const begin = async () => {
     setBusy(true);
     const outcome = await start({ assignmentId }).catch(() => null);
-    if (outcome?.ok) return router.push(`/submissions/${outcome.value.submissionId}`);
     setBusy(false);
-    warn(outcome?.error.message ?? 'The server did not answer. Nothing was lost; try again.');
+    if (outcome?.ok) leave(() => router.push(`/submissions/${outcome.value.submissionId}`));
+    else warn(outcome?.error.message ?? 'The server did not answer. Nothing was lost; try again.');
   };
   return (
-    <Button kind="primary" busy={busy} busyText="Opening your desk …" onClick={() => void begin()}>
+    <Button kind="primary" busy={busy || leaving} busyText="Opening your desk …" onClick={() => void begin()}>
       {again ? 'Begin another attempt' : 'Begin'}
     </Button>
   );

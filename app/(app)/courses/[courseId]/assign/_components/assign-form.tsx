@@ -1,7 +1,7 @@
 'use client';
 
 import { useRouter } from 'next/navigation';
-import { useMemo, useState } from 'react';
+import { useMemo, useState, useTransition } from 'react';
 import { useSubmit } from '@/app/_components/use-submit';
 import { Button, Choices, EmptyState, ErrorNote, Field, Input, Radio } from '@/components/ui';
 import { LocalTime } from '@/components/marking/local-time';
@@ -20,10 +20,11 @@ interface AssignFormProps {
 /** An excerpt, a reading of it to mark against, a title. */
 export function AssignForm({ courseId, readings, excerptId }: AssignFormProps) {
   const router = useRouter();
+  const [leaving, leave] = useTransition();
   const excerpts = useMemo(() => excerptsOf(readings), [readings]);
   const [chosen, setChosen] = useState(excerpts.find((one) => one.excerptId === excerptId)?.excerptId ?? '');
   const [typed, setTyped] = useState<string | null>(null);
-  const { busy, fields, failure, onSubmit } = useSubmit(createAssignment, ({ assignmentId }) => router.push(`/assignments/${assignmentId}`));
+  const { busy, fields, failure, onSubmit } = useSubmit(createAssignment, ({ assignmentId }) => leave(() => router.push(`/assignments/${assignmentId}`)));
   const excerpt = excerpts.find((one) => one.excerptId === chosen);
   const title = typed ?? excerpt?.excerptTitle ?? '';
   return (
@@ -42,7 +43,7 @@ export function AssignForm({ courseId, readings, excerptId }: AssignFormProps) {
             <p className="measure text-small text-ink-soft">
               It begins as a draft that asks every label. Next you choose what is asked, how it is marked, and when it opens.
             </p>
-            <div><Button type="submit" kind="primary" busy={busy} busyText="Making the draft …">Make the draft</Button></div>
+            <div><Button type="submit" kind="primary" busy={busy || leaving} busyText="Making the draft …">Make the draft</Button></div>
           </>
         ) : (
           <EmptyState title="Choose an excerpt">Its readings are shown here then: one of them becomes the answer key.</EmptyState>
