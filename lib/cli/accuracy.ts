@@ -47,7 +47,7 @@ function judge(item: DevItem, decoded: Decoded, reliability: Reliability): void 
     for (let i = span.from; i < span.to; i++) {
       const label = gold[i];
       if (!label) continue;
-      const time = (item.slices.end[i]! - item.slices.start[i]!) / item.score.ticksPerQuarter;
+      const time = ((item.slices.end[i] ?? 0) - (item.slices.start[i] ?? 0)) / item.score.ticksPerQuarter;
       reliability.add(span.certainty, time, creditOf(span.state, label) === 1, first.some(([state]) => creditOf(state, label) === 1));
     }
   }

@@ -26,10 +26,10 @@ export interface LearningOptions {
   readonly margin: number;
 }
 
-export const LEARNING: LearningOptions = { epochs: 4, seed: 1, namedRate: 0.03, labelRate: 0.06, fineRate: 0.08, margin: 1 };
+export const LEARNING: LearningOptions = { epochs: 4, seed: 1, namedRate: 0.02, labelRate: 0.04, fineRate: 0.04, margin: 1 };
 
 /** Learning sees a narrower lattice than the search: what is far off teaches nothing. */
-const TRAINING_LATTICE = { ...LATTICE_OPTIONS, nodesPerSegment: 28, nodeMargin: 8 };
+const TRAINING_LATTICE = { ...LATTICE_OPTIONS, nodesPerSegment: 24, nodeMargin: 8 };
 
 /** A small seeded generator (mulberry32), so that training gives the same weights every time. */
 export function seededRandom(seed: number): () => number {
