@@ -1,6 +1,9 @@
 import { beforeAll, describe, expect, it } from 'vitest';
+import { unwrap } from '@/lib/result';
 import { openScoreFile } from '@/lib/score/open-score-file';
+import { performedBars } from '@/lib/score/performed-bars';
 import { readScoreText } from '@/lib/score/read-score';
+import type { Score } from '@/lib/score/score';
 import { corpusScores, hasCorpus, hasSuite, readCorpusScore, readSuiteFile, suiteFiles } from '../support/shared';
 import { Witness } from '../support/witness';
 
@@ -58,6 +61,12 @@ const KNOWN_CORPUS: Readonly<Record<string, readonly [number, string]>> = {
 /** Refused by us: see tests/published/musicxml-suite.test.ts. */
 const REFUSED = ['11b-TimeSignatures-NoTime.xml', '32ad-Notations5.musicxml'];
 
+/** How many notes sound when the bars are played in `performedBars`' order. */
+function countPlayed(score: Score): number {
+  const startsIn = score.bars.map(({ start, length }) => score.notes.filter((note) => note.start >= start && note.start < start + length).length);
+  return performedBars(score).reduce((sum, bar) => sum + (startsIn[bar] ?? 0), 0);
+}
+
 let witness: Witness;
 beforeAll(async () => {
   witness = await Witness.create();
@@ -87,5 +96,12 @@ describe('the witness hears the same notes at the same times', () => {
 
   it.skipIf(!hasCorpus)('in every score of the development corpus, but for the listed differences', { timeout: 600_000 }, () => {
     expect(countsOf(corpusScores(), readCorpusScore, KNOWN_CORPUS)).toEqual([]);
+  });
+
+  it.skipIf(!hasCorpus)('plays repeats and endings in the same order, by the number of notes', { timeout: 300_000 }, () => {
+    const texts = corpusScores().map((slug) => [slug, unwrap(openScoreFile(readCorpusScore(slug))).xml] as const);
+    const repeated = texts.filter(([, xml]) => xml.includes('<repeat '));
+    expect(repeated.length).toBeGreaterThan(20);
+    for (const [slug, xml] of repeated) expect(countPlayed(unwrap(readScoreText(xml))), slug).toBe(witness.countPerformed(xml));
   });
 });
