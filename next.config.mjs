@@ -4,6 +4,8 @@ const config = {
   distDir: process.env.NEXT_DIST_DIR || '.next',
   // `npm test` type-checks everything, tests included; a build that does it again only takes longer.
   typescript: { ignoreBuildErrors: true },
+  // In development Next would print what actions are called with: people's words, which belong in no log.
+  logging: { serverFunctions: false },
   poweredByHeader: false,
   reactStrictMode: true,
   allowedDevOrigins: ['127.0.0.1', 'localhost'],
