@@ -3,7 +3,7 @@ import { describe, expect, it } from 'vitest';
 import { annotateFile } from '@/lib/score/annotate-file';
 import { annotateScore } from '@/lib/score/annotate-score';
 import type { Annotation } from '@/lib/score/annotation';
-import { importAnalysis } from '@/lib/score/import-analysis';
+import { countAnalysis, importAnalysis } from '@/lib/score/import-analysis';
 import { ticks } from '@/lib/score/score';
 import { formatLabelsAsCsv } from '@/lib/score/write-csv';
 import { unwrap } from '@/lib/result';
@@ -216,5 +216,13 @@ describe('formatLabelsAsCsv', () => {
   it('cannot smuggle a formula into a spreadsheet', () => {
     const score = mustRead(onePart(['number="=1+1"', note('C4')]));
     expect(formatLabelsAsCsv(score, [label(0, 'C major', 'I')], 1)).toContain("\r\n'=1+1,");
+  });
+});
+
+describe('countAnalysis', () => {
+  it('says what a teacher may import', () => {
+    const sung = '<lyric number="1"><text>V7</text></lyric>';
+    const xml = onePart('<figured-bass><figure><figure-number>6</figure-number></figure></figured-bass>' + note('C4', { after: sung }) + note('D4'));
+    expect(unwrap(countAnalysis(annotateScore(xml, [label(0, 'C major', 'I'), label(1, 'C major', 'V')])))).toEqual({ harmony: 2, 'figured-bass': 1, lyrics: 1 });
   });
 });
