@@ -51,7 +51,8 @@ export function SplitPicker({ score, label, onsets, onSplit, onCancel }: SplitPi
           </div>
         </>
       )}
-      <button type="button" className="link mt-1 min-h-6 text-small" onClick={onCancel}>Leave</button>
+      {/* With nothing to choose, the keys still belong to the picker: Escape must close it. */}
+      <button type="button" ref={(button) => void (inside.length === 0 && button?.focus())} className="link mt-1 min-h-6 text-small" onClick={onCancel}>Leave</button>
     </div>
   );
 }
