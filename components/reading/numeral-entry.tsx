@@ -6,6 +6,7 @@ import { NumeralText } from '@/components/score/numeral-text';
 import type { Label } from '@/lib/harmony/reading';
 import type { Score } from '@/lib/score/score';
 import type { ConventionSheet } from '@/lib/theory/conventions';
+import type { Numeral } from '@/lib/theory/numeral';
 import { formatKeyForPeople } from '@/lib/theory/key';
 import { formatNumeralPlain } from '@/lib/theory/numeral-format';
 import { typesetNumeral } from '@/lib/theory/typeset';
@@ -16,6 +17,8 @@ interface NumeralEntryProps {
   readonly label: Label;
   readonly score: Score;
   readonly sheet: ConventionSheet;
+  /** The numeral before the label, in the same key: figures alone repeat it. */
+  readonly previous: Numeral | null;
   /** What was typed to open it; null opens it with the label's own numeral, selected. */
   readonly typed: string | null;
   /** `onward`: open the next label too (1), the one before (−1), or none (0). */
@@ -26,11 +29,11 @@ interface NumeralEntryProps {
 }
 
 /** The line that is typed into, at its label. It says at every key what the text means, or where it stops making sense. */
-export function NumeralEntry({ label, score, sheet, typed, onWrite, onCancel, compares }: NumeralEntryProps) {
+export function NumeralEntry({ label, score, sheet, previous, typed, onWrite, onCancel, compares }: NumeralEntryProps) {
   const [text, setText] = useState(() => typed ?? (label.numeral ? formatNumeralPlain(label.numeral, label.key.mode, sheet) : ''));
   const input = useRef<HTMLInputElement>(null);
   const id = useId();
-  const read = parseWritten(text, label.key, sheet);
+  const read = parseWritten(text, label.key, sheet, previous);
 
   const commit = (onward: -1 | 0 | 1) => {
     if (read.ok) return onWrite(read.value, onward);

@@ -21,7 +21,7 @@ import { NumeralEntry } from './numeral-entry';
 import { ScoreTable } from './score-table';
 import { SplitPicker } from './split-picker';
 import type { Desk } from './use-desk';
-import { writeAt } from './written';
+import { findNumeralBefore, writeAt } from './written';
 
 interface ScoreRegionProps extends Pick<DeskProps, 'firstBar' | 'lastBar' | 'feedback' | 'rules'> {
   readonly xml: string;
@@ -165,6 +165,7 @@ function Entry({ score, sheet, desk }: Pick<ScoreRegionProps, 'score' | 'sheet' 
       label={label}
       score={score}
       sheet={sheet}
+      previous={findNumeralBefore(state.reading, label)}
       typed={opened.typed}
       compares={context.powers.proposals}
       onCancel={close}

@@ -2,6 +2,7 @@ import { type EditResult, setNumeral } from '@/lib/harmony/edit';
 import { changeKeyFrom } from '@/lib/harmony/edit-keys';
 import type { Label, Reading } from '@/lib/harmony/reading';
 import { type Result, err, ok } from '@/lib/result';
+import { readRepeatedFigures } from '@/lib/marking/repeated-figures';
 import type { ConventionSheet } from '@/lib/theory/conventions';
 import { type Key, equalKeys, parseKey } from '@/lib/theory/key';
 import type { Numeral } from '@/lib/theory/numeral';
@@ -27,16 +28,25 @@ export interface WrittenError {
 
 const KEY_PART = /^\s*([A-Ga-g](?:#|b|♯|♭)*(?:\s+(?:major|minor))?)\s*:/u;
 
-export function parseWritten(text: string, key: Key, sheet: ConventionSheet): Result<Written, WrittenError> {
+/** `previous` is the numeral before the label: figures alone repeat it. */
+export function parseWritten(text: string, key: Key, sheet: ConventionSheet, previous: Numeral | null = null): Result<Written, WrittenError> {
   const part = KEY_PART.exec(text);
   const newKey = part ? parseKey(part[1] as string) : null;
   if (newKey && !newKey.ok) return err(newKey.error);
   const rest = text.slice(part?.[0].length ?? 0);
   const offset = text.length - rest.length + (rest.length - rest.trimStart().length);
   if (rest.trim() === '') return ok({ key: newKey?.value ?? null, numeral: null });
+  const repeated = newKey ? null : readRepeatedFigures(rest.trim(), previous, key.mode);
+  if (repeated) return ok({ key: null, numeral: repeated });
   const numeral = parseNumeral(rest.trim(), (newKey?.value ?? key).mode, sheet);
   if (!numeral.ok) return err({ offset: offset + numeral.error.offset, message: numeral.error.message });
   return ok({ key: newKey?.value ?? null, numeral: numeral.value });
+}
+
+/** The numeral of the label before, when it is in the same key. */
+export function findNumeralBefore(reading: Reading, label: Label): Numeral | null {
+  const before = reading.labels.find((other) => other.end === label.start);
+  return before && equalKeys(before.key, label.key) ? before.numeral : null;
 }
 
 /** Makes it so: the key from the label on, then its numeral. A key alone leaves the numeral to sound as it did. */

@@ -28,6 +28,12 @@ const ANATOMY: Readonly<Record<Quality, { triad: Triad; seventh: Seventh; ninth?
   other: { triad: 'other', seventh: 'none' },
 };
 
+/** The triad that a chord is or is built on; null for augmented sixths and chords without one. */
+export function triadOf(quality: Quality): 'major' | 'minor' | 'diminished' | 'augmented' | null {
+  const { triad } = ANATOMY[quality];
+  return triad === 'other' || triad === 'augmented-sixth' ? null : triad;
+}
+
 export function isAugmentedSixth(quality: Quality): boolean {
   return ANATOMY[quality].triad === 'augmented-sixth';
 }
