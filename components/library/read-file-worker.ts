@@ -9,3 +9,5 @@ self.addEventListener('message', (event: MessageEvent<ArrayBuffer>) => {
     : { ok: false, message: score.error.message, line: score.error.line ?? null, element: score.error.element ?? null };
   self.postMessage(facts);
 });
+
+self.postMessage('started');
