@@ -50,8 +50,9 @@ export function Lanes(props: LanesProps) {
   const { describe, onSelect, onOpen } = props;
   const words = useMemo(() => new Map(labels.map((label) => [label.id, describe(label)])), [labels, describe]);
 
+  // Between the labels the staves take the pointer: a drag over them selects a span.
   return (
-    <div className="absolute inset-0">
+    <div className="pointer-events-none absolute inset-0 [&>button]:pointer-events-auto [&>div]:pointer-events-auto">
       <LaneRules geometry={geometry} model={model} />
       <KeyLine geometry={geometry} regions={reading.regions} onOpen={props.onOpenKey} />
       {model.labels.map((placed) => (
