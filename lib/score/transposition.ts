@@ -1,4 +1,4 @@
-import { type Fifths, type Pitch, LETTERS, diatonicOf, fifths, fifthsOf } from '../theory/pitch';
+import { type Fifths, type Pitch, type LETTERS, diatonicOf, fifths, fifthsOf } from '../theory/pitch';
 
 /** An interval from written to sounding pitch: letters up and place on the line of fifths. */
 export interface Transposition {

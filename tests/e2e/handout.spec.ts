@@ -74,6 +74,7 @@ test('a student finds no handout page', async ({ page }) => {
   const address = page.url();
   await page.context().clearCookies();
   await signIn(page, 'a.dovell');
-  const response = await page.goto(address);
-  expect(response?.status()).toBe(404);
+  await page.goto(address);
+  await expect(page.getByRole('heading', { level: 1, name: 'There is nothing here' })).toBeVisible();
+  await expect(page.getByRole('heading', { name: 'Handout' })).toHaveCount(0);
 });

@@ -162,7 +162,7 @@ test('a new password ends the sessions of other devices', async ({ browser }) =>
   await page.getByRole('button', { name: 'Save the password' }).click();
   await expect(page.getByText('The new password is saved.')).toBeVisible();
   await page.reload();
-  await expect(page.getByRole('heading', { name: 'Account' })).toBeVisible();
+  await expect(page.getByRole('heading', { name: 'Account', exact: true })).toBeVisible();
   await other.reload();
   await expect(other.getByRole('heading', { name: 'Sign in' })).toBeVisible();
 });

@@ -32,9 +32,9 @@ export function HandoutPreview({ print, kind, paper, asked, onRetry }: HandoutPr
       </div>
       {print.failure ? <ErrorNote title="Not printed" action={<Button onClick={onRetry}>Try again</Button>}>{print.failure}</ErrorNote> : null}
       {print.pages.length === 0 && print.busy ? <Skeleton className={`${RATIO[paper]} w-full max-w-3xl`} /> : null}
-      <ol className={`flex max-w-3xl flex-col gap-6 ${print.busy ? 'opacity-60' : ''}`} aria-label="Pages">
+      <div className={`flex max-w-3xl flex-col gap-6 ${print.busy ? 'opacity-60' : ''}`}>
         {print.pages.map((page, i) => (
-          <li
+          <div
             key={i}
             role="img"
             aria-label={`Page ${i + 1} of ${print.pages.length}`}
@@ -42,7 +42,7 @@ export function HandoutPreview({ print, kind, paper, asked, onRetry }: HandoutPr
             dangerouslySetInnerHTML={{ __html: page }}
           />
         ))}
-      </ol>
+      </div>
     </section>
   );
 }
