@@ -175,6 +175,8 @@ test('remarks: written on a label, answered, reworded, resolved, taken back', as
 });
 
 test('the desk has no accessibility violation, by day and by night, with what it opens', async ({ page }) => {
+  // Some thousand nodes of engraved notation, looked through in every state and theme.
+  test.slow();
   await startReading(page, 'Staircase');
   await expectNoViolation(page);
   await labels(page).nth(1).click();
