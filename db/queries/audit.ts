@@ -1,6 +1,7 @@
-import { and, desc, eq, lt } from 'drizzle-orm';
+import { and, desc, eq, inArray, lt, or } from 'drizzle-orm';
+import type { MySqlColumn, MySqlTable } from 'drizzle-orm/mysql-core';
 import type { Db } from '@/db/client';
-import { auditEvents, users } from '@/db/schema';
+import { assignments, auditEvents, courses, excerpts, readings, scores, users } from '@/db/schema';
 import type { Actor } from '@/lib/auth/actor';
 
 export interface AuditNote {
@@ -41,8 +42,15 @@ export interface AuditEvent {
   readonly actorName: string | null;
 }
 
-/** The department's trail, newest first, a page at a time: those before an instant. */
-export async function getAuditEvents(db: Db, actor: Actor, before: Date | null, limit: number): Promise<AuditEvent[]> {
+/** Where a page of the trail begins: after this event. */
+export type AuditPlace = Pick<AuditEvent, 'createdAt' | 'id'>;
+
+function isBefore({ createdAt, id }: AuditPlace) {
+  return or(lt(auditEvents.createdAt, createdAt), and(eq(auditEvents.createdAt, createdAt), lt(auditEvents.id, id)));
+}
+
+/** The department's trail, newest first, a page at a time. */
+export async function getAuditEvents(db: Db, actor: Actor, after: AuditPlace | null, limit: number): Promise<AuditEvent[]> {
   return db
     .select({
       id: auditEvents.id,
@@ -55,9 +63,29 @@ export async function getAuditEvents(db: Db, actor: Actor, before: Date | null, 
     })
     .from(auditEvents)
     .leftJoin(users, eq(users.id, auditEvents.actorId))
-    .where(
-      and(eq(auditEvents.departmentId, actor.departmentId), before ? lt(auditEvents.createdAt, before) : undefined),
-    )
+    .where(and(eq(auditEvents.departmentId, actor.departmentId), after ? isBefore(after) : undefined))
     .orderBy(desc(auditEvents.createdAt), desc(auditEvents.id))
     .limit(limit);
+}
+
+/** Where the name of a subject is found, by its kind. A kind that is not here is shown by its id: a reading may be private. */
+const NAMED: Readonly<Record<string, { readonly table: MySqlTable; readonly id: MySqlColumn; readonly name: MySqlColumn }>> = {
+  user: { table: users, id: users.id, name: users.name },
+  course: { table: courses, id: courses.id, name: courses.title },
+  score: { table: scores, id: scores.id, name: scores.title },
+  excerpt: { table: excerpts, id: excerpts.id, name: excerpts.title },
+  key: { table: readings, id: readings.id, name: readings.title },
+  assignment: { table: assignments, id: assignments.id, name: assignments.title },
+};
+
+/** What the events' subjects are called now, by id. The events were scoped when they were read. */
+export async function findSubjectNames(db: Db, events: readonly AuditEvent[]): Promise<ReadonlyMap<string, string>> {
+  const names = new Map<string, string>();
+  for (const [kind, { table, id, name }] of Object.entries(NAMED)) {
+    const ids = events.filter((event) => event.subjectKind === kind).map((event) => event.subjectId);
+    if (ids.length === 0) continue;
+    const rows = await db.select({ id, name }).from(table).where(inArray(id, ids));
+    for (const row of rows) names.set(String(row.id), String(row.name));
+  }
+  return names;
 }

@@ -1,10 +1,12 @@
 import { and, eq } from 'drizzle-orm';
 import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest';
+import { type AuditEvent, findSubjectNames, getAuditEvents } from '@/db/queries/audit';
 import { listInvitations, listMembers } from '@/db/queries/members';
 import { findActor, getMemberships } from '@/db/queries/users';
 import { auditEvents, courseMembers, departmentMembers, outbox, users } from '@/db/schema';
 import type { Actor } from '@/lib/auth/actor';
 import { verifyPassword } from '@/lib/auth/password';
+import { unwrap } from '@/lib/result';
 import { acceptInvitation } from '@/lib/workflows/accept-invitation';
 import { changeMemberRole } from '@/lib/workflows/change-member-role';
 import { chooseDepartment } from '@/lib/workflows/change-own-account';
@@ -191,6 +193,29 @@ describe('changeMemberRole', () => {
     const [event] = await services.deps.db.select().from(auditEvents).where(eq(auditEvents.departmentId, owner.departmentId));
     expect(event).toMatchObject({ verb: 'members.change_role', actorId: owner.userId, subjectId: teacher.userId, details: { from: 'instructor', to: 'assistant' } });
     expect(JSON.stringify(event)).not.toContain(teacher.name);
+  });
+});
+
+describe('the audit trail', () => {
+  it('comes a page at a time, newest first, without losing events of the same moment', async () => {
+    const invited = new Set<string>();
+    for (let n = 0; n < 5; n += 1) {
+      const result = await inviteMember(services.deps, owner, { email: newEmail(), role: 'student' });
+      invited.add(unwrap(result).invitationId);
+    }
+    const pages: AuditEvent[][] = [];
+    for (let n = 0; n < 3; n += 1) {
+      pages.push(await getAuditEvents(services.deps.db, owner, pages.at(-1)?.at(-1) ?? null, 2));
+    }
+    expect(pages.map((page) => page.length)).toEqual([2, 2, 1]);
+    expect(new Set(pages.flat().map((event) => event.subjectId))).toEqual(invited);
+  });
+
+  it('says what a member is called now', async () => {
+    const teacher = await person('instructor', 'teacher');
+    await changeMemberRole(services.deps, owner, { userId: teacher.userId, role: 'assistant' });
+    const events = await getAuditEvents(services.deps.db, owner, null, 10);
+    expect(await findSubjectNames(services.deps.db, events)).toEqual(new Map([[teacher.userId, teacher.name]]));
   });
 });
 
