@@ -8,8 +8,7 @@ async function openHandout(page: Page): Promise<void> {
   await signIn(page, 't.wrenfield');
   await page.goto('/library');
   await page.locator('a[href^="/excerpts/"]', { hasText: 'Evening Hymn' }).first().click();
-  const row = page.locator('tr, li, section').filter({ hasText: 'Reading by Tobias Wrenfield' }).last();
-  await row.locator('a[href^="/handouts/"]').first().click();
+  await page.getByRole('link', { name: 'Hand out: Reading by Tobias Wrenfield' }).filter({ visible: true }).first().click();
   await expect(page.getByRole('heading', { level: 1, name: 'Handout' })).toBeVisible();
 }
 
@@ -19,6 +18,8 @@ async function engraved(page: Page): Promise<void> {
 }
 
 test('an instructor prints a worksheet with blanks, then the key, as PDF', async ({ page }) => {
+  // Four engravings.
+  test.slow();
   await openHandout(page);
   await engraved(page);
   await page.getByLabel('Applied chords').check();
@@ -43,6 +44,7 @@ test('an instructor prints a worksheet with blanks, then the key, as PDF', async
 });
 
 test('spans are chosen one by one; an empty title is refused and nothing is lost', async ({ page }) => {
+  test.slow();
   await openHandout(page);
   await engraved(page);
   await page.getByLabel('Those I choose').check();
