@@ -10,7 +10,7 @@ export interface Mail {
 export interface Mailer {
   /** Resolves when the mail server has taken the mail; rejects when it has not. */
   send(mail: Mail): Promise<void>;
-  /** Rejects when the mail server does not answer within a few seconds. */
+  /** Rejects when the mail server does not answer within ten seconds. */
   check(): Promise<void>;
   close(): void;
 }

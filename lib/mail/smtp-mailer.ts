@@ -2,7 +2,7 @@ import { createTransport } from 'nodemailer';
 import type { MailConfig } from '@/lib/config';
 import type { Mail, Mailer } from './mailer';
 
-const CONNECT_WITHIN_MS = 3_000;
+const CONNECT_WITHIN_MS = 10_000;
 const ANSWER_WITHIN_MS = 20_000;
 
 /** `Understave <understave@example.org>` → `example.org` */

@@ -12,7 +12,7 @@ export interface ObjectStore {
   exists(sha256: string): Promise<boolean>;
   /** Removes it; a missing one is no harm. */
   remove(sha256: string): Promise<void>;
-  /** Rejects when the store or its bucket does not answer within a few seconds. */
+  /** Rejects when the store or its bucket does not answer within ten seconds. */
   check(): Promise<void>;
 }
 

@@ -10,9 +10,9 @@ import {
 import type { StoreConfig } from '@/lib/config';
 import { type ObjectStore, StoreError, sha256Of } from './object-store';
 
-const CONNECT_WITHIN_MS = 3_000;
+const CONNECT_WITHIN_MS = 5_000;
 const ANSWER_WITHIN_MS = 30_000;
-const CHECK_WITHIN_MS = 3_000;
+const CHECK_WITHIN_MS = 10_000;
 const SHA256 = /^[0-9a-f]{64}$/;
 
 function createClient(config: StoreConfig): S3Client {
