@@ -84,7 +84,8 @@ function startWorker(): Worker {
 function ask(worker: Worker, job: AnalyseJob): Promise<{ value: AnalyseOutcome; alive: boolean }> {
   return new Promise((resolve) => {
     const done = (value: AnalyseOutcome, alive: boolean) => {
-      worker.removeAllListeners();
+      // By name: the worker's own listeners start its port again for the next job.
+      for (const event of ['message', 'error', 'exit']) worker.removeAllListeners(event);
       resolve({ value, alive });
     };
     worker.once('message', (value: AnalyseOutcome) => done(value, true));
