@@ -29,8 +29,8 @@ export function CutForm({ bars, scoreTitle, range, onRange, busy, onCut }: CutFo
   };
   return (
     <form onSubmit={submit} aria-label="Cut an excerpt" className="grid grid-cols-2 items-end gap-x-3 gap-y-2 border-y border-rule-strong bg-paper py-3 sm:grid-cols-[6rem_6rem_minmax(0,1fr)] xl:grid-cols-[5.5rem_5.5rem_minmax(0,1fr)_minmax(0,1fr)_auto]">
-      <BarField key={`first ${range.first}`} label="From bar" bars={bars} index={range.first} onBar={(first) => onRange({ first, last: Math.max(first, range.last) })} />
-      <BarField key={`last ${range.first} ${range.last}`} label="To bar" bars={bars} index={range.last} from={range.first} onBar={(last) => onRange({ first: Math.min(range.first, last), last })} />
+      <BarField label="From bar" bars={bars} index={range.first} onBar={(first) => onRange({ first, last: Math.max(first, range.last) })} />
+      <BarField label="To bar" bars={bars} index={range.last} from={range.first} onBar={(last) => onRange({ first: Math.min(range.first, last), last })} />
       <Field label="Title" className="col-span-2 sm:col-span-1">
         <Input value={typed ?? proposed} maxLength={300} onChange={(event) => setTyped(event.target.value)} />
       </Field>
@@ -57,6 +57,12 @@ interface BarFieldProps {
 /** Takes a printed number when the field is left; says so when the score has no such bar. */
 function BarField({ label, bars, index, from, onBar }: BarFieldProps) {
   const [text, setText] = useState(formatBar(bars, index));
+  const [shown, setShown] = useState(index);
+  // Picked on the score, or moved by the other field: what is typed here gives way.
+  if (shown !== index) {
+    setShown(index);
+    setText(formatBar(bars, index));
+  }
   const found = findBar(bars, text, from);
   return (
     <Field label={label} error={found === null ? 'No such bar' : undefined}>

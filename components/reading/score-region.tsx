@@ -1,6 +1,6 @@
 'use client';
 
-import { useCallback, useEffect, useMemo, useRef, useState } from 'react';
+import { useCallback, useEffect, useLayoutEffect, useMemo, useRef, useState } from 'react';
 import { BoundaryGrip } from '@/components/score/boundary-grip';
 import type { SheetGeometry } from '@/components/score/geometry';
 import { Lanes } from '@/components/score/lanes';
@@ -63,19 +63,23 @@ export function ScoreRegion(props: ScoreRegionProps) {
   );
 }
 
-/** Keeps the keyboard on the selected label once it is in the region, and gives it back when what was opened closes. */
+/**
+ * Keeps the keyboard on the selected label once it is in the region, and gives it back when what was opened closes. In
+ * the same turn as the change, so that the next key is not lost.
+ */
 function useFocusFollows(region: { readonly current: HTMLElement | null }, labelId: string, opened: string): void {
   const before = useRef({ labelId, opened });
-  useEffect(() => {
-    const closed = before.current.opened !== 'none' && opened === 'none';
-    const moved = before.current.labelId !== labelId;
+  useLayoutEffect(() => {
+    const was = before.current;
     before.current = { labelId, opened };
-    if (opened !== 'none' || !(closed || moved)) return;
+    const closed = was.opened !== 'none';
+    if (opened !== 'none' || !(closed || was.labelId !== labelId)) return;
     const find = () => region.current?.querySelector<HTMLElement>(`[data-label="${labelId}"]`);
-    // A dialog lets go of the keyboard only after it has closed.
-    if (closed) setTimeout(() => find()?.focus(), 0);
-    else if (document.activeElement === document.body || region.current?.contains(document.activeElement)) find()?.focus();
+    const active = document.activeElement;
+    if (closed || active === document.body || region.current?.contains(active)) find()?.focus();
     else find()?.scrollIntoView({ block: 'nearest', inline: 'nearest' });
+    // A dialog lets go of the keyboard only after it has closed.
+    if (was.opened === 'key' || was.opened === 'help') setTimeout(() => find()?.focus(), 0);
   });
 }
 

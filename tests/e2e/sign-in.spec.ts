@@ -1,15 +1,10 @@
 import AxeBuilder from '@axe-core/playwright';
 import { type Browser, type Locator, type Page, expect, test } from '@playwright/test';
 import signIns from '../../db/seed/sign-ins.json' with { type: 'json' };
+import { demoPerson } from '../support/e2e';
 import { mailsTo } from '../support/mail-sink';
 
-const { password: PASSWORD, people } = signIns;
-
-function demoPerson(role: string) {
-  const person = people.find((each) => each.role === role);
-  if (!person) throw new Error(`the demo has no ${role}`);
-  return person;
-}
+const PASSWORD = signIns.password;
 
 let invited = 0;
 const newEmail = () => `newcomer-${Date.now()}-${(invited += 1)}@fennimoor.example`;

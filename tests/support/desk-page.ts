@@ -5,7 +5,7 @@ export async function startReading(page: Page, excerpt: string): Promise<string>
   await page.goto('/library');
   await page.getByRole('link', { name: excerpt, exact: true }).last().click();
   await page.getByRole('button', { name: 'Start mine from this' }).or(page.getByRole('button', { name: 'Start my reading' })).first().click();
-  await expect(page).toHaveURL(/\/desk\//, { timeout: 60_000 });
+  await expect(page).toHaveURL(/\/desk\//, { timeout: 120_000 });
   await expect(labels(page).first()).toBeVisible({ timeout: 60_000 });
   return page.url();
 }

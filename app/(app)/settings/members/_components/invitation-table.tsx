@@ -1,9 +1,9 @@
 'use client';
 
+import { useAct } from '@/app/_components/use-act';
 import { Button, Mark, Row, Table, Td, Th } from '@/components/ui';
 import type { Role } from '@/lib/vocabularies';
 import { resend, revoke } from '../actions';
-import { useAct } from './use-act';
 
 export interface InvitationRow {
   readonly id: string;

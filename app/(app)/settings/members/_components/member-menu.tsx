@@ -2,10 +2,10 @@
 
 import { useState } from 'react';
 import { loadPage } from '@/app/_components/load-page';
+import { useAct } from '@/app/_components/use-act';
 import { Button, Confirm, Menu, MenuAction, MenuRule } from '@/components/ui';
 import { erase, remove } from '../actions';
 import type { MemberRow } from './member-table';
-import { useAct } from './use-act';
 
 type Asked = 'remove' | 'erase' | null;
 

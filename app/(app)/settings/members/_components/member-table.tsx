@@ -1,11 +1,11 @@
 'use client';
 
 import { useState } from 'react';
+import { useAct } from '@/app/_components/use-act';
 import { Button, EmptyState, Field, Input, Row, Select, Table, Td, Th } from '@/components/ui';
 import { ROLES, type Role } from '@/lib/vocabularies';
 import { changeRole } from '../actions';
 import { MemberMenu } from './member-menu';
-import { useAct } from './use-act';
 
 export interface MemberRow {
   readonly userId: string;

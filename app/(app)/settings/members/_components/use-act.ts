@@ -1,1 +1,0 @@
-export { useAct } from '@/app/_components/use-act';
