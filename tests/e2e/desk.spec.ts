@@ -44,7 +44,7 @@ test('by keyboard alone: accept, write, split, join, change the key, undo, redo;
 
   await page.keyboard.press('End');
   await page.keyboard.press('k');
-  await page.getByLabel('New key').fill('Eb');
+  await page.getByRole('textbox', { name: 'New key' }).fill('Eb');
   await page.keyboard.press('Enter');
   await expect(labels(page).last()).toHaveAttribute('aria-label', /E♭ major/);
   await expectSaved(page);
