@@ -6,7 +6,7 @@ import { PHONE, demoPerson, signIn } from '../support/e2e';
 import { mailsTo } from '../support/mail-sink';
 
 /** One course from its first name on the roster to the marks that came back; each test goes on from the one before. */
-test.describe.configure({ mode: 'serial' });
+test.describe.configure({ mode: 'serial', timeout: 300_000 });
 
 const COURSE = `Figured bass ${Date.now()}`;
 const TITLE = `Cadences ${Date.now()}`;
