@@ -40,7 +40,8 @@ const CONTAINER = '<?xml version="1.0"?><container><rootfiles><rootfile full-pat
 /** The same in a compressed file. Source of its form: W3C MusicXML 4.0, "Compressed .MXL files". */
 export function mxlOf(xml: string): Uint8Array<ArrayBuffer> {
   const text = (content: string) => new TextEncoder().encode(content);
-  return new Uint8Array(zipSync({ 'META-INF/container.xml': text(CONTAINER), 'score.xml': text(xml) }));
+  // A fixed time: the same content is the same file, whenever it is packed.
+  return new Uint8Array(zipSync({ 'META-INF/container.xml': text(CONTAINER), 'score.xml': text(xml) }, { mtime: '2026-01-01T00:00:00' }));
 }
 
 const BOMB_BYTES = 101 * 1024 * 1024;
