@@ -117,6 +117,8 @@ test('a link by mail signs in once, and lets a forgotten password be replaced', 
   const page = await (await browser.newContext()).newPage();
   await page.goto('/sign-in');
   await page.getByRole('link', { name: 'Get a link by mail' }).click();
+  // Both pages have a field of that name.
+  await expect(page.getByRole('heading', { name: 'Sign in by mail' })).toBeVisible();
   await page.getByLabel('E-mail').fill(email);
   await page.getByRole('button', { name: 'Send me a link' }).click();
   await expect(page.getByText('Look into your mailbox')).toBeVisible();
