@@ -1,4 +1,5 @@
 import type { Metadata } from 'next';
+import { Suspense } from 'react';
 import { ButtonLink, PageHeader, StateMark } from '@/components/ui';
 import { listAssignments } from '@/db/queries/assignments';
 import { type Course, findCourse, findEnrolmentCode, listCourseInvitations, listRoster } from '@/db/queries/courses';
@@ -7,6 +8,7 @@ import type { Actor } from '@/lib/auth/actor';
 import { canBeHere, canMark, canPrepareAssignments, canRunCourse } from '@/lib/auth/permissions';
 import { orNotFound, requireActor } from '@/lib/http/visitor';
 import { createDeps } from '@/lib/workflows/deps';
+import { PageSkeleton } from '../_components/page-skeleton';
 import { AssignmentTable } from './_components/assignment-table';
 import { CourseMenu } from './_components/course-menu';
 import { CourseTabs } from './_components/course-tabs';
@@ -30,7 +32,11 @@ export async function generateMetadata(props: CoursePageProps): Promise<Metadata
 
 export default async function CoursePage(props: CoursePageProps) {
   const { actor, course } = await getCourse(props);
-  return canMark(actor, course.courseRole) ? <TaughtCourse actor={actor} course={course} /> : <TakenCourse actor={actor} course={course} />;
+  return (
+    <Suspense fallback={<PageSkeleton />}>
+      {canMark(actor, course.courseRole) ? <TaughtCourse actor={actor} course={course} /> : <TakenCourse actor={actor} course={course} />}
+    </Suspense>
+  );
 }
 
 interface CourseViewProps {

@@ -1,5 +1,6 @@
 import type { Metadata } from 'next';
-import { ButtonLink, EmptyState, PageHeader } from '@/components/ui';
+import { Suspense } from 'react';
+import { ButtonLink, EmptyState, PageHeader, SkeletonRows } from '@/components/ui';
 import { type Assignment, findAssignment, findExcerptBars } from '@/db/queries/assignments';
 import { listUsedRemarks, unsafeListMarks } from '@/db/queries/marks';
 import { countingAttempts, listSubmissions } from '@/db/queries/submissions';
@@ -35,7 +36,9 @@ export default async function MarkingPage({ params, searchParams }: MarkingPageP
           { label: 'Marking' },
         ]}
       />
-      <Board actor={actor} assignment={assignment} student={(await searchParams).student ?? null} />
+      <Suspense fallback={<SkeletonRows rows={6} label="Fetching the answers" />}>
+        <Board actor={actor} assignment={assignment} student={(await searchParams).student ?? null} />
+      </Suspense>
     </div>
   );
 }
