@@ -28,14 +28,14 @@ const REMARK_COLUMNS = {
   updatedAt: remarks.updatedAt,
 };
 
-/** All remarks of a reading, oldest first. Whoever calls it has checked who may see the reading. */
+/** All remarks of a reading, in the order they were written. Whoever calls it has checked who may see the reading. */
 export async function unsafeListRemarks(db: Db, readingId: string): Promise<RemarkRow[]> {
   return db
     .select(REMARK_COLUMNS)
     .from(remarks)
     .innerJoin(users, eq(users.id, remarks.authorId))
     .where(and(eq(remarks.readingId, readingId), isNull(remarks.deletedAt)))
-    .orderBy(asc(remarks.createdAt), asc(remarks.id));
+    .orderBy(asc(remarks.createdAt), asc(remarks.written));
 }
 
 export async function unsafeFindRemark(db: Db, readingId: string, remarkId: string): Promise<RemarkRow | null> {

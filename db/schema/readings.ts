@@ -1,5 +1,6 @@
 import {
   type AnyMySqlColumn,
+  bigint,
   boolean,
   double,
   index,
@@ -140,6 +141,8 @@ export const remarks = mysqlTable(
     authorId: id('author_id')
       .notNull()
       .references(() => users.id),
+    /** Counts up with every remark: two of the same millisecond keep the order they were written in. */
+    written: bigint('written', { mode: 'number' }).autoincrement().notNull().unique('remarks_written'),
     body: text('body').notNull(),
     resolvedAt: utcDateTime('resolved_at'),
     resolvedBy: id('resolved_by').references(() => users.id),

@@ -187,6 +187,13 @@ describe('remarks', () => {
     expect(all.map((r) => [r.by, r.threadId, r.barIndex])).toEqual([[me.name, null, 0], [colleague.name, head!.id, 0]]);
   });
 
+  it('stand in the order they were written, within one millisecond too', async () => {
+    const still = { ...services.deps, now: () => new Date('2026-03-01T09:00:00.000Z') };
+    const words = ['one', 'two', 'three', 'four', 'five', 'six'];
+    for (const word of words) unwrap(await addRemark(still, me, remark(word)));
+    expect(unwrap(await listRemarks(still, me, { readingId })).remarks.map((r) => r.body)).toEqual(words);
+  });
+
   it('refuse a thread of another reading', async () => {
     const other = await addReading(services.deps, me.departmentId, excerptId, { ownerId: me.userId, kind: 'person' });
     const [head] = unwrap(await addRemark(services.deps, me, { ...remark('Elsewhere'), readingId: other })).remarks;
