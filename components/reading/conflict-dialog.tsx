@@ -16,17 +16,19 @@ interface ConflictDialogProps {
   readonly sheet: ConventionSheet;
   onTakeTheirs(): void;
   onPutMine(): void;
+  /** Closed without a choice: it can be made later, from the toolbar. */
+  onPutOff(): void;
 }
 
 /** Someone saved the same labels first: both are shown, and one is chosen. Nothing is lost until then. */
-export function ConflictDialog({ conflict, score, sheet, onTakeTheirs, onPutMine }: ConflictDialogProps) {
+export function ConflictDialog({ conflict, score, sheet, onTakeTheirs, onPutMine, onPutOff }: ConflictDialogProps) {
   const { edit, theirs } = conflict;
   const mine = edit.change.labels.after;
   const start = Math.min(...mine.map((l) => l.start));
   const end = Math.max(...mine.map((l) => l.end));
   const saved = theirs.labels.filter((l) => l.start < end && l.end > start);
   return (
-    <Dialog open onOpenChange={() => undefined} title="Two versions of the same place" description="Another window or person saved these labels while you were writing. Your edit is kept here; choose which one stands.">
+    <Dialog open={!conflict.putOff} onOpenChange={(open) => !open && onPutOff()} title="Two versions of the same place" description="Another window or person saved these labels while you were writing. Your edit is kept here and nothing is sent until you choose which one stands.">
       <div className="grid gap-4 sm:grid-cols-2">
         <Side title="Saved meanwhile" labels={saved} score={score} sheet={sheet} />
         <Side title={`Yours: ${edit.words}`} labels={mine} score={score} sheet={sheet} />

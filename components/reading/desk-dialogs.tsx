@@ -35,6 +35,7 @@ export function DeskDialogs({ desk, score, sheet }: { readonly desk: Desk; reado
           conflict={conflict}
           score={score}
           sheet={sheet}
+          onPutOff={() => dispatch({ kind: 'put-off' })}
           onTakeTheirs={() => dispatch({ kind: 'take-theirs' })}
           onPutMine={() => dispatch({ kind: 'put-mine', editId: crypto.randomUUID(), change: layOver(conflict.theirs, conflict.edit.change, () => crypto.randomUUID()) })}
         />

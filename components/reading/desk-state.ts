@@ -39,6 +39,8 @@ export interface Conflict {
   readonly edit: PendingEdit;
   readonly version: number;
   readonly theirs: Reading;
+  /** The choice was put off: nothing is sent until it is made. */
+  readonly putOff: boolean;
 }
 
 /** A saved edit as the server tells it. */
@@ -56,7 +58,8 @@ export type DeskAction =
   | { readonly kind: 'select'; readonly labelId: string; readonly extend?: boolean }
   | { readonly kind: 'adopt'; readonly edits: readonly PendingEdit[] }
   | { readonly kind: 'received'; readonly version: number; readonly revisions: readonly Revision[]; readonly confirmed?: string }
-  | { readonly kind: 'conflicted'; readonly conflict: Conflict }
+  | { readonly kind: 'conflicted'; readonly conflict: Omit<Conflict, 'putOff'> }
+  | { readonly kind: 'put-off' | 'choose-now' }
   | { readonly kind: 'take-theirs' }
   | { readonly kind: 'put-mine'; readonly editId: string; readonly change: Change }
   | { readonly kind: 'say'; readonly text: string };
@@ -91,7 +94,11 @@ export function reduceDesk(state: DeskState, action: DeskAction): DeskState {
     case 'received':
       return receive(state, action);
     case 'conflicted':
-      return { ...state, conflict: action.conflict };
+      return { ...state, conflict: { ...action.conflict, putOff: false } };
+    case 'put-off':
+      return say(putOff(state, true), 'Both versions are kept. Nothing is sent until you have chosen one.');
+    case 'choose-now':
+      return putOff(state, false);
     case 'take-theirs':
       return say(settle(state, []), 'Theirs stands.');
     case 'put-mine':
@@ -187,6 +194,10 @@ function receive(state: DeskState, action: Extract<DeskAction, { kind: 'received
 function newsOf(revisions: readonly Revision[]): string {
   const names = [...new Set(revisions.map((r) => r.by ?? 'The engine'))].join(', ');
   return revisions.length === 1 ? `${names} changed a label.` : `${names} made ${revisions.length} changes.`;
+}
+
+function putOff(state: DeskState, isPutOff: boolean): DeskState {
+  return state.conflict ? { ...state, conflict: { ...state.conflict, putOff: isPutOff } } : state;
 }
 
 /** Ends a conflict: the overtaken edit goes, `instead` comes first in the queue. */

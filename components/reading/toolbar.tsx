@@ -22,7 +22,7 @@ export function Toolbar({ context, saving, heading, actions, zoom, arrows, onMar
   return (
     <div role="toolbar" aria-label="Desk" className="flex flex-wrap items-center gap-x-3 gap-y-1 border-b border-rule-strong bg-paper px-3 py-1.5">
       <div className="mr-auto min-w-0 shrink truncate">{heading}</div>
-      {saving ? <SaveMark saving={saving} /> : null}
+      {saving ? <SaveMark saving={saving} onChoose={() => context.dispatch({ kind: 'choose-now' })} /> : null}
       {powers.write ? (
         <span className="flex items-center">
           <Tool context={context} id="undo" disabled={state.undo.length === 0}>Undo</Tool>
@@ -122,7 +122,7 @@ const SAVE_LOOKS = {
   refused: { tone: 'eye', shape: 'cross', words: 'Not taken' },
 } as const;
 
-function SaveMark({ saving }: { readonly saving: Saving }) {
+function SaveMark({ saving, onChoose }: { readonly saving: Saving; onChoose(): void }) {
   const look = SAVE_LOOKS[saving.state];
   const stuck = saving.state === 'kept-here' || saving.state === 'signed-out' || saving.state === 'refused';
   return (
@@ -131,6 +131,7 @@ function SaveMark({ saving }: { readonly saving: Saving }) {
       <Mark tone={look.tone} shape={look.shape}>{look.words}</Mark>
       {saving.message ? <span className="text-madder">{saving.message}</span> : null}
       {saving.state === 'signed-out' ? <a className="link" href="/sign-in" target="_blank" rel="noreferrer">Sign in</a> : null}
+      {saving.state === 'overtaken' ? <button type="button" className="link min-h-6" onClick={onChoose}>Choose</button> : null}
       {stuck ? <button type="button" className="link min-h-6" onClick={saving.retry}>Try now</button> : null}
     </span>
   );

@@ -128,6 +128,11 @@ test('two tabs: edits of different labels go together, of one label both are sho
   const dialog = other.getByRole('dialog', { name: 'Two versions of the same place' });
   await expect(dialog).toBeVisible({ timeout: 40_000 });
   await expect(dialog).toContainText('Saved meanwhile');
+  // Closed without a choice, it waits in the toolbar.
+  await dialog.getByRole('button', { name: 'Close' }).click();
+  await expect(dialog).toBeHidden();
+  await other.getByRole('button', { name: 'Choose' }).click();
+  await expect(dialog).toContainText('Saved meanwhile');
   await dialog.getByRole('button', { name: 'Put mine in its place' }).click();
   await expect(dialog).toBeHidden();
   await expectSaved(other);
