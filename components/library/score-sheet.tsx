@@ -31,20 +31,23 @@ export function ScoreSheet({ fileUrl, shown, range, onPick }: ScoreSheetProps) {
   const firstBar = shown?.first ?? 0;
   const lastBar = shown?.last ?? score.bars.length - 1;
   return (
-    <div role="img" aria-label={`The score, ${lastBar - firstBar + 1} bars`} className="overflow-x-auto bg-sheet px-2 py-4">
-      <ScoreView
-        xml={xml}
-        score={score}
-        firstBar={firstBar}
-        lastBar={lastBar}
-        zoom={0.72}
-        room={ROOM}
-        heldTick={score.bars[range?.first ?? firstBar]?.start ?? 0}
-        underlay={(geometry) => (range ? <Bars geometry={geometry} of={range} className="border-b-3 border-ink bg-selection" /> : null)}
-        overlay={(geometry) =>
-          onPick ? <Bars geometry={geometry} of={{ first: firstBar, last: lastBar }} className="cursor-pointer hover:bg-ink/8" onPick={onPick} /> : null
-        }
-      />
+    // The keyboard must be able to scroll what is wider than the screen.
+    <div role="region" aria-label="The score" tabIndex={0} className="overflow-x-auto bg-sheet px-2 py-4">
+      <div role="img" aria-label={`The score, ${lastBar - firstBar + 1} bars`}>
+        <ScoreView
+          xml={xml}
+          score={score}
+          firstBar={firstBar}
+          lastBar={lastBar}
+          zoom={0.72}
+          room={ROOM}
+          heldTick={score.bars[range?.first ?? firstBar]?.start ?? 0}
+          underlay={(geometry) => (range ? <Bars geometry={geometry} of={range} className="border-b-3 border-ink bg-selection" /> : null)}
+          overlay={(geometry) =>
+            onPick ? <Bars geometry={geometry} of={{ first: firstBar, last: lastBar }} className="cursor-pointer hover:bg-ink/8" onPick={onPick} /> : null
+          }
+        />
+      </div>
     </div>
   );
 }

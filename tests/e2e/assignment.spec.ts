@@ -203,7 +203,7 @@ test('the instructor marks by question, by keyboard and for one student alone, a
   await expect(groups.first()).toContainText('looked at');
 
   await page.getByRole('tab', { name: /^By student/ }).click();
-  await page.getByLabel('Student').selectOption({ label: DARIA.name });
+  await page.getByLabel('Student', { exact: true }).selectOption({ label: DARIA.name });
   await expect(labels(page).first()).toBeVisible(SLOW);
   await expectGoodAtBothSizes(page);
 

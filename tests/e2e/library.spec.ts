@@ -10,8 +10,12 @@ function upload(name: string, content: string | Uint8Array) {
   return { name, mimeType: 'application/octet-stream', buffer: Buffer.from(content) };
 }
 
+/** A page that has just come may not listen yet: what is chosen then is chosen again. */
 async function chooseFiles(page: Page, ...files: ReturnType<typeof upload>[]): Promise<void> {
-  await page.getByLabel('MusicXML files').setInputFiles(files);
+  await expect(async () => {
+    await page.getByLabel('MusicXML files').setInputFiles(files);
+    await expect(page.getByRole('form', { name: 'Files to bring in' })).toBeVisible({ timeout: 3000 });
+  }).toPass();
 }
 
 async function state(page: Page, source: string, rights: string): Promise<void> {
@@ -153,7 +157,7 @@ for (const theme of ['day', 'night'] as const) {
     await expectNoViolation(page);
     const wider = await page.evaluate(() => document.documentElement.scrollWidth > document.documentElement.clientWidth);
     expect(wider).toBe(false);
-    await page.getByRole('table').getByRole('link').first().click();
+    await page.getByRole('table').getByRole('rowheader').getByRole('link').first().click();
     await expect(page.locator('.engraving svg').first()).toBeVisible({ timeout: 60_000 });
     await expectNoViolation(page);
   });
