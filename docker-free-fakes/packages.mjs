@@ -42,6 +42,9 @@ export async function installNpmPackages() {
 export const MARIADB = { program: '/usr/sbin/mariadbd', packages: ['mariadb-server-core', 'mariadb-client-core'] };
 export const CHROMIUM = { program: '/usr/bin/chromium', packages: ['chromium'] };
 export const PYTHON = { program: '/usr/bin/python3', packages: ['python3'] };
+/** Outside readers that the annotated MusicXML is held against. */
+export const XMLLINT = { program: '/usr/bin/xmllint', packages: ['libxml2-utils'] };
+export const LILYPOND = { program: '/usr/bin/musicxml2ly', packages: ['lilypond'] };
 
 async function aptGet(...args) {
   const env = { ...process.env, DEBIAN_FRONTEND: 'noninteractive' };

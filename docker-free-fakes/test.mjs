@@ -5,7 +5,7 @@
 import { mkdirSync, rmSync } from 'node:fs';
 import path from 'node:path';
 import { takeLock } from './lock.mjs';
-import { checkNode, CHROMIUM, installNpmPackages, installPrograms, MARIADB, PYTHON } from './packages.mjs';
+import { checkNode, CHROMIUM, installNpmPackages, installPrograms, LILYPOND, MARIADB, PYTHON, XMLLINT } from './packages.mjs';
 import { ROOT } from './places.mjs';
 import { runSession } from './session.mjs';
 import { say, SetupError } from './steps.mjs';
@@ -13,7 +13,7 @@ import { e2e, lint, types, vitest } from './test-parts.mjs';
 
 const PARTS = { lint, types, unit: vitest('unit'), published: vitest('published'), integration: vitest('integration'), e2e };
 /** Programs that a part needs. The corpus tests ask the scorer beside the repository, which is Python. */
-const NEEDS = { published: [PYTHON], integration: [MARIADB], e2e: [MARIADB, CHROMIUM] };
+const NEEDS = { published: [PYTHON, XMLLINT, LILYPOND], integration: [MARIADB], e2e: [MARIADB, CHROMIUM] };
 
 function parseArguments() {
   const given = process.argv.slice(2);

@@ -80,6 +80,19 @@ describe('a score with the engine’s reading in it', () => {
     for (const { name, after } of annotated) execFileSync('xmllint', ['--nonet', '--noout', save(name, after)]);
   });
 
+  it.skipIf(!hasCorpus || !hasXmllint)('holds only harmony elements as MusicXML 4.0 describes them', { timeout: 120_000 }, () => {
+    const schema = path.join(import.meta.dirname, '../support/harmony-element.xsd');
+    const validate = (name: string, elements: string) =>
+      spawnSync('xmllint', ['--nonet', '--noout', '--schema', schema, save(name, `<harmonies>${elements}</harmonies>`)], { encoding: 'utf8' });
+    for (const { name, after } of annotated) {
+      const found = after.match(/<harmony placement="below"[\s\S]*?<\/harmony>/g) ?? [];
+      expect(found.length, name).toBeGreaterThan(0);
+      expect(validate(name, found.join('')).stderr, name).toMatch(/ validates\n$/);
+    }
+    // The schema can tell: kind before numeral is refused.
+    expect(validate('swapped', '<harmony><kind>major</kind><numeral><numeral-root>1</numeral-root></numeral></harmony>').status).toBe(3);
+  });
+
   it.skipIf(!hasCorpus || !hasXmllint || !hasSchema)('validates against the MusicXML 4.0 schema where the input does', { timeout: 300_000 }, () => {
     const isValid = (name: string, xml: string) => spawnSync('xmllint', ['--nonet', '--noout', '--schema', SCHEMA, save(name, xml)]).status === 0;
     for (const { name, before, after } of annotated) expect(isValid(name, after) || !isValid(name, before), name).toBe(true);
