@@ -6,6 +6,7 @@ import type { Score } from '@/lib/score/score';
 import { readGeometry } from './engraving';
 import type { SheetGeometry } from './geometry';
 import { sliceMeasures } from './slice-measures';
+import { type Spacing, onsetsPerQuarter, widenFor } from './spacing';
 
 export interface EngravedSheetProps {
   /** The whole score's partwise MusicXML, parsed once for all sheets. */
@@ -56,7 +57,7 @@ async function engrave(host: HTMLDivElement, sheet: Engraving): Promise<SheetGeo
   const { OpenSheetMusicDisplay } = await import('opensheetmusicdisplay');
   const proof = layProof(host, sheet.width);
   const osmd = new OpenSheetMusicDisplay(proof, options(sheet.score));
-  makeRoom(osmd, sheet.room);
+  makeRoom(osmd, sheet.room, widenFor(onsetsPerQuarter(sheet.score, sheet.first, sheet.last)));
   await osmd.load(sliceMeasures(sheet.document, sheet.first, sheet.last));
   if (!proof.isConnected) return null;
   osmd.zoom = 1;
@@ -99,7 +100,7 @@ function options(score: Score) {
 }
 
 /** Widened spacing keeps neighbouring labels apart; the gap between systems holds our lanes. */
-function makeRoom(osmd: OpenSheetMusicDisplay, room: number): void {
+function makeRoom(osmd: OpenSheetMusicDisplay, room: number, spacing: Spacing): void {
   const rules = osmd.EngravingRules;
   rules.MinSkyBottomDistBetweenSystems = room / 10 + 1;
   rules.MinimumDistanceBetweenSystems = room / 10 + 1;
@@ -107,6 +108,6 @@ function makeRoom(osmd: OpenSheetMusicDisplay, room: number): void {
   rules.PageBottomMargin = room / 10;
   rules.PageLeftMargin = 3;
   rules.PageRightMargin = 1;
-  rules.VoiceSpacingMultiplierVexflow = 0.85;
-  rules.VoiceSpacingAddendVexflow = 3;
+  rules.VoiceSpacingMultiplierVexflow = spacing.multiplier;
+  rules.VoiceSpacingAddendVexflow = spacing.addend;
 }
