@@ -6,11 +6,13 @@ interface WrittenScore {
   readonly bars?: number;
   /** Printed number of the first bar. */
   readonly firstNumber?: number;
+  /** A syllable under each bar, '' for none. */
+  readonly lyrics?: readonly string[];
 }
 
 /** A small piano piece in C for the tests: one whole-note triad a bar, tonic and dominant in turn. */
-export function musicXml({ title = 'A piece of the tests', composer = 'Nobody', bars = 4, firstNumber = 1 }: WrittenScore = {}): string {
-  const measures = Array.from({ length: bars }, (_, i) => measure(firstNumber + i, i === 0, i % 2 === 0 ? TONIC : DOMINANT));
+export function musicXml({ title = 'A piece of the tests', composer = 'Nobody', bars = 4, firstNumber = 1, lyrics = [] }: WrittenScore = {}): string {
+  const measures = Array.from({ length: bars }, (_, i) => measure(firstNumber + i, i === 0, i % 2 === 0 ? TONIC : DOMINANT, lyrics[i] ?? ''));
   return [
     '<?xml version="1.0" encoding="UTF-8"?>',
     '<score-partwise version="4.0">',
@@ -27,10 +29,11 @@ const DOMINANT = ['G3', 'D4', 'F4', 'B4'];
 const ATTRIBUTES =
   '<attributes><divisions>1</divisions><key><fifths>0</fifths></key><time><beats>4</beats><beat-type>4</beat-type></time><clef><sign>G</sign><line>2</line></clef></attributes>';
 
-function measure(number: number, isFirst: boolean, chord: readonly string[]): string {
+function measure(number: number, isFirst: boolean, chord: readonly string[], syllable: string): string {
+  const lyric = syllable === '' ? '' : `<lyric number="1"><syllabic>single</syllabic><text>${syllable}</text></lyric>`;
   const notes = chord.map(
     (note, i) =>
-      `<note>${i > 0 ? '<chord/>' : ''}<pitch><step>${note.charAt(0)}</step><octave>${note.charAt(1)}</octave></pitch><duration>4</duration><voice>1</voice><type>whole</type></note>`,
+      `<note>${i > 0 ? '<chord/>' : ''}<pitch><step>${note.charAt(0)}</step><octave>${note.charAt(1)}</octave></pitch><duration>4</duration><voice>1</voice><type>whole</type>${i === 0 ? lyric : ''}</note>`,
   );
   return `<measure number="${number}">${isFirst ? ATTRIBUTES : ''}${notes.join('')}</measure>`;
 }

@@ -4,9 +4,12 @@ import { unsafeLoadReadingContent } from '@/db/queries/reading-rows';
 import type { Actor } from '@/lib/auth/actor';
 import { validateReading } from '@/lib/harmony/validate';
 import { unwrap } from '@/lib/result';
+import { formatKey } from '@/lib/theory/key';
+import { formatNumeral } from '@/lib/theory/numeral-format';
 import { deleteExcerpt, restoreExcerpt } from '@/lib/workflows/change-excerpt';
 import { deleteScore } from '@/lib/workflows/change-score';
 import { cutExcerpt } from '@/lib/workflows/cut-excerpt';
+import { importReading } from '@/lib/workflows/import-reading';
 import { makeAnswerKey, startReading } from '@/lib/workflows/start-reading';
 import { readingOf } from '@/lib/workflows/stored-reading';
 import { uploadScore } from '@/lib/workflows/upload-score';
@@ -110,6 +113,35 @@ describe('startReading', () => {
     const seen = await listReadingsOfExcerpts(deps.db, colleague, [excerptId]);
     expect(seen.map(({ kind }) => kind)).toEqual(['engine']);
     expect(await startReading(deps, colleague, { excerptId, basedOn: readingId })).toMatchObject({ ok: false, error: { code: 'not_found' } });
+  });
+});
+
+describe('importReading', () => {
+  /** An excerpt of bars 2–3 of a score that has numerals as lyrics. */
+  async function excerptWithLyrics(lyrics: readonly string[]) {
+    const { deps } = services;
+    const actor = await someone(deps, 'instructor');
+    const scoreId = await readyScore(deps, actor, { title: `Sung ${lyrics.join(' ')}`, lyrics });
+    const { excerptId } = unwrap(await cutExcerpt(deps, actor, { ...CUT, firstBar: 1, lastBar: 2, scoreId }));
+    return { deps, actor, excerptId };
+  }
+
+  it('makes a private reading of the labels that the file holds in these bars', async () => {
+    const { deps, actor, excerptId } = await excerptWithLyrics(['I', 'G: I', 'C: I', 'V7']);
+    const { readingId } = unwrap(await importReading(deps, actor, { excerptId, source: 'lyrics' }));
+    const { labels, regions } = await unsafeLoadReadingContent(deps.db, { id: readingId, startTick: 4, endTick: 12 });
+    const named = labels.map(({ start, end, key, numeral, state }) => [start, end, formatKey(key), numeral && formatNumeral(numeral, key.mode), state]);
+    expect(named).toEqual([[4, 8, 'G major', 'I', 'accepted'], [8, 12, 'C major', 'I', 'accepted']]);
+    expect(regions.map(({ start, end, key }) => [start, end, formatKey(key)])).toEqual([[4, 8, 'G major'], [8, 12, 'C major']]);
+    const colleague = await addPerson(deps, actor.departmentId, 'assistant', 'colleague');
+    expect((await listReadingsOfExcerpts(deps.db, colleague, [excerptId])).map(({ id }) => id)).not.toContain(readingId);
+  });
+
+  it('says when the bars hold nothing of the kind', async () => {
+    const { deps, actor, excerptId } = await excerptWithLyrics(['I', '', '', 'V7']);
+    for (const source of ['harmony', 'lyrics'] as const) {
+      expect(await importReading(deps, actor, { excerptId, source })).toMatchObject({ ok: false, error: { code: 'bad_input' } });
+    }
   });
 });
 

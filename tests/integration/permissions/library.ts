@@ -54,6 +54,7 @@ export const library: Cases = {
     expected: STAFF,
   },
   'readings.start': { input: theExcerpt, expected: STAFF },
+  'readings.import': { input: (world) => ({ excerptId: world.excerptId, source: 'lyrics' }), expected: STAFF },
   'readings.make_key': {
     input: (world) => ({ excerptId: world.excerptId, basedOn: world.engineReadingId, title: 'Key' }),
     expected: STAFF,

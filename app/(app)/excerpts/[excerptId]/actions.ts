@@ -3,6 +3,7 @@
 import { canCutExcerpt, canUseLibrary } from '@/lib/auth/permissions';
 import { action } from '@/lib/http/action';
 import { changeExcerpt, deleteExcerpt, proposeAgain, restoreExcerpt } from '@/lib/workflows/change-excerpt';
+import { importReading, importReadingInput } from '@/lib/workflows/import-reading';
 import { changeExcerptInput, excerptInput } from '@/lib/workflows/library-input';
 import { makeAnswerKey, makeAnswerKeyInput, startReading, startReadingInput } from '@/lib/workflows/start-reading';
 
@@ -19,3 +20,5 @@ export const proposeAgainAction = action({ name: 'excerpts.propose_again', can: 
 export const startReadingAction = action({ name: 'readings.start', can: canUseLibrary, input: startReadingInput, revalidate: shown }, startReading);
 
 export const makeAnswerKeyAction = action({ name: 'readings.make_key', can: canUseLibrary, input: makeAnswerKeyInput, revalidate: shown }, makeAnswerKey);
+
+export const importReadingAction = action({ name: 'readings.import', can: canUseLibrary, input: importReadingInput, revalidate: shown }, importReading);

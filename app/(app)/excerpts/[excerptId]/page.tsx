@@ -10,6 +10,7 @@ import { canChangeLibraryItem, canPrepareAssignments, canUseLibrary } from '@/li
 import { orNotFound, requireActor } from '@/lib/http/visitor';
 import { createDeps } from '@/lib/workflows/deps';
 import { ExcerptActions } from './_components/excerpt-actions';
+import { ImportReading } from './_components/import-reading';
 import { ProposalWatch } from './_components/proposal-watch';
 import { ReadingTable } from './_components/reading-table';
 import { StartReading } from './_components/start-reading';
@@ -54,6 +55,9 @@ export default async function ExcerptPage({ params }: ExcerptPageProps) {
       <Section title="Readings" aside={<>cut <DateText date={excerpt.createdAt} /> by {excerpt.creatorName}</>}>
         {readings.some(({ state }) => state === 'proposing') ? <ProposalWatch excerptId={excerpt.id} /> : null}
         <ReadingTable excerptId={excerpt.id} excerptTitle={excerpt.title} readings={readings} ownId={actor.userId} />
+        <div className="mt-4">
+          <ImportReading excerptId={excerpt.id} scoreId={excerpt.scoreId} span={{ firstBar: excerpt.firstBar, lastBar: excerpt.lastBar }} />
+        </div>
       </Section>
       <Section title="The passage">
         <ScoreSheet fileUrl={`/api/scores/${excerpt.scoreId}/file`} shown={{ first: excerpt.firstBar, last: excerpt.lastBar }} range={null} />
