@@ -9,6 +9,7 @@ import type { Score } from '@/lib/score/score';
 import { equalKeys } from '@/lib/theory/key';
 import { type DeskAction, type DeskState, findSelection, getSelected } from './desk-state';
 import type { Powers } from './desk-types';
+import type { Played } from './use-sound';
 
 /** What a command works on. `ui` opens what the desk shows beside the score. */
 export interface DeskContext {
@@ -33,11 +34,15 @@ export interface DeskUi {
   zoom(step: -1 | 1): void;
   nextTab(): void;
   toggleArrows(): void;
+  play(what: Played): void;
+  /** Whether something sounds; `stop` ends it. */
+  readonly playing: boolean;
+  stop(): void;
 }
 
 type Need = 'write' | 'spans' | 'keys' | 'proposals';
 
-export const COMMAND_GROUPS = ['Going about', 'Labels', 'Spans', 'Keys', 'The desk'] as const;
+export const COMMAND_GROUPS = ['Going about', 'Labels', 'Spans', 'Keys', 'Sound', 'The desk'] as const;
 
 export interface Command {
   readonly id: string;
@@ -169,6 +174,11 @@ export const COMMANDS: readonly Command[] = [
 
   { id: 'key', words: 'Change the key from here', keys: ['k'], group: 'Keys', needs: 'keys', run: (c) => c.ui.chooseKey() },
   { id: 'exchange', words: 'Tonicise or modulate', keys: ['t'], group: 'Keys', needs: 'keys', run: (c) => edit(c, exchangeFrame(c.state.reading, findSelection(c.state)), 'Read in the other frame.') },
+
+  { id: 'play', words: 'Play from here, or stop', keys: ['Space'], group: 'Sound', run: (c) => (c.ui.playing ? c.ui.stop() : c.ui.play('from-here')) },
+  { id: 'play-span', words: 'Play the selection', keys: ['Shift+Space'], group: 'Sound', run: (c) => c.ui.play('span') },
+  { id: 'play-chord', words: 'Play the label as a chord', keys: ['h'], group: 'Sound', run: (c) => c.ui.play('chord') },
+  { id: 'play-reduction', words: 'Play the chords from here', keys: ['H'], group: 'Sound', run: (c) => c.ui.play('reduction') },
 
   { id: 'undo', words: 'Undo', keys: ['Ctrl+Z'], group: 'The desk', needs: 'write', run: (c) => c.dispatch({ kind: 'undo', editId: crypto.randomUUID() }) },
   { id: 'redo', words: 'Redo', keys: ['Ctrl+Shift+Z', 'Ctrl+Y'], group: 'The desk', needs: 'write', run: (c) => c.dispatch({ kind: 'redo', editId: crypto.randomUUID() }) },

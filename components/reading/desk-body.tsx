@@ -14,6 +14,7 @@ import { Margin, type MarginPage } from './margin';
 import { OthersPanel } from './others-panel';
 import { RemarksPanel } from './remarks-panel';
 import { ScoreRegion } from './score-region';
+import { SoundStrip } from './sound-strip';
 import { Toolbar } from './toolbar';
 import { useDesk, useDeskState } from './use-desk';
 import { useRemarks } from './use-remarks';
@@ -93,6 +94,7 @@ export function DeskBody(props: DeskBodyProps) {
           />
         </aside>
       </div>
+      <SoundStrip context={context} score={score} sound={desk.sound} />
       <Ledger
         score={score}
         firstBar={firstBar}

@@ -2,7 +2,7 @@
 
 /** `Ctrl+Shift+Z`, `ArrowLeft`, `?`. Shift is named only where the character does not show it. Command counts as Ctrl. */
 export function nameKey(event: Pick<KeyboardEvent, 'key' | 'ctrlKey' | 'metaKey' | 'altKey' | 'shiftKey'>): string {
-  const isCharacter = [...event.key].length === 1;
+  const isCharacter = [...event.key].length === 1 && event.key !== ' ';
   const chord = event.ctrlKey || event.metaKey;
   const key = event.key === ' ' ? 'Space' : isCharacter && chord ? event.key.toUpperCase() : event.key;
   const shift = event.shiftKey && (!isCharacter || chord) ? 'Shift+' : '';
@@ -25,6 +25,7 @@ const NAMES: Readonly<Record<string, string>> = {
   ArrowUp: '↑',
   ArrowDown: '↓',
   Escape: 'Esc',
+  Space: 'Space bar',
 };
 
 /** A key as it is printed on the help sheet. */

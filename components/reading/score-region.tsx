@@ -4,6 +4,7 @@ import { useCallback, useEffect, useLayoutEffect, useMemo, useRef, useState } fr
 import { BoundaryGrip } from '@/components/score/boundary-grip';
 import type { SheetGeometry } from '@/components/score/geometry';
 import { Lanes } from '@/components/score/lanes';
+import { PlayCursor } from '@/components/score/play-cursor';
 import { PointerSurface } from '@/components/score/pointer-surface';
 import { ResolutionArrows } from '@/components/score/resolution-arrows';
 import { ScoreView } from '@/components/score/score-view';
@@ -111,6 +112,7 @@ function Overlay(props: ScoreRegionProps & { readonly geometry: SheetGeometry })
         onPress={(tick, extend) => onSelect(labelAt(tick)?.id ?? '', extend)}
         onDrag={(tick) => onSelect(labelAt(tick)?.id ?? '', true)}
       />
+      <PlayCursor geometry={geometry} place={desk.sound.place} />
       <ResolutionArrows geometry={geometry} score={score} tones={tendencies} />
       <Lanes
         geometry={geometry}

@@ -37,6 +37,7 @@ export function Toolbar({ context, saving, heading, actions, zoom, arrows, onMar
         </span>
       ) : null}
       <span className="flex items-center">
+        <Tool context={context} id="play" label={context.ui.playing ? 'Stop' : 'Play from here'}>{context.ui.playing ? 'Stop' : 'Play'}</Tool>
         {powers.proposals ? <Tool context={context} id="arrows" pressed={arrows}>Resolutions</Tool> : null}
         <Tool context={context} id="smaller" label="Smaller">−</Tool>
         <span className="tabular hidden w-11 text-center text-small sm:inline" aria-live="polite">{Math.round(zoom * 100)} %</span>

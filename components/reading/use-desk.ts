@@ -9,6 +9,7 @@ import type { Score } from '@/lib/score/score';
 import type { DeskContext } from './commands';
 import { type DeskAction, type DeskState, openDesk, reduceDesk } from './desk-state';
 import { type DeskProps, isGiven, powersOf } from './desk-types';
+import { type Sound, useSound } from './use-sound';
 
 /** What is open beside or over the score. */
 export type Opened = { readonly kind: 'none' } | { readonly kind: 'write'; readonly typed: string | null } | { readonly kind: 'split' | 'key' | 'help' };
@@ -19,6 +20,7 @@ export interface Desk {
   open(opened: Opened): void;
   readonly zoom: number;
   readonly arrows: boolean;
+  readonly sound: Sound;
   readonly page: string;
   setPage(page: string): void;
   readonly remarkTurn: number;
@@ -40,6 +42,7 @@ export function useDesk(props: DeskProps, score: Score, startZoom: number, state
   const [page, setPage] = useState(firstPage(props));
   const [remarkTurn, setRemarkTurn] = useState(0);
   const [marginOpen, setMarginOpen] = useState(false);
+  const sound = useSound(score, state, dispatch);
   const geometries = useRef(new Map<number, SheetGeometry>());
   const powers = useMemo(() => powersOf(mode, rules), [mode, rules]);
   const onsets = useMemo(() => onsetsOf(score, reading.start, reading.end), [score, reading.start, reading.end]);
@@ -70,9 +73,12 @@ export function useDesk(props: DeskProps, score: Score, startZoom: number, state
       zoom: (step) => setZoom((now) => stepZoom(now, step)),
       nextTab: () => setPage((now) => nextPage(now, powers.proposals)),
       toggleArrows: () => setArrows((on) => !on),
+      play: sound.play,
+      playing: sound.playing,
+      stop: sound.stop,
     },
   };
-  return { context, opened, open, zoom, arrows, page, setPage, remarkTurn, marginOpen, setMarginOpen, isGiven: given, noteGeometry };
+  return { context, opened, open, zoom, arrows, sound, page, setPage, remarkTurn, marginOpen, setMarginOpen, isGiven: given, noteGeometry };
 }
 
 export function useDeskState(props: DeskProps): [DeskState, Dispatch<DeskAction>] {
