@@ -9,6 +9,7 @@ import type { Score } from '@/lib/score/score';
 import { equalKeys } from '@/lib/theory/key';
 import { type DeskAction, type DeskState, findSelection, getSelected } from './desk-state';
 import type { Powers } from './desk-types';
+import type { Beside } from './use-beside';
 import type { Played } from './use-sound';
 
 /** What a command works on. `ui` opens what the desk shows beside the score. */
@@ -23,6 +24,8 @@ export interface DeskContext {
   /** The label nearest in the system above (−1) or below (1); null at the edge. */
   neighbourSystem(labelId: string, step: -1 | 1): string | null;
   readonly ui: DeskUi;
+  /** The reading beside this one, when there is one. */
+  readonly beside: Beside | null;
 }
 
 export interface DeskUi {
@@ -40,9 +43,9 @@ export interface DeskUi {
   stop(): void;
 }
 
-type Need = 'write' | 'spans' | 'keys' | 'proposals';
+type Need = 'write' | 'spans' | 'keys' | 'proposals' | 'beside';
 
-export const COMMAND_GROUPS = ['Going about', 'Labels', 'Spans', 'Keys', 'Sound', 'The desk'] as const;
+export const COMMAND_GROUPS = ['Going about', 'Labels', 'Spans', 'Keys', 'Side by side', 'Sound', 'The desk'] as const;
 
 export interface Command {
   readonly id: string;
@@ -175,6 +178,10 @@ export const COMMANDS: readonly Command[] = [
   { id: 'key', words: 'Change the key from here', keys: ['k'], group: 'Keys', needs: 'keys', run: (c) => c.ui.chooseKey() },
   { id: 'exchange', words: 'Tonicise or modulate', keys: ['t'], group: 'Keys', needs: 'keys', run: (c) => edit(c, exchangeFrame(c.state.reading, findSelection(c.state)), 'Read in the other frame.') },
 
+  { id: 'next-difference', words: 'Next difference', keys: ['x'], group: 'Side by side', needs: 'beside', run: (c) => c.beside?.step(1) },
+  { id: 'previous-difference', words: 'Difference before', keys: ['X'], group: 'Side by side', needs: 'beside', run: (c) => c.beside?.step(-1) },
+  { id: 'take-over', words: 'Take theirs over', keys: ['y'], group: 'Side by side', needs: 'beside', run: (c) => c.beside?.take(c.beside.current) },
+
   { id: 'play', words: 'Play from here, or stop', keys: ['Space'], group: 'Sound', run: (c) => (c.ui.playing ? c.ui.stop() : c.ui.play('from-here')) },
   { id: 'play-span', words: 'Play the selection', keys: ['Shift+Space'], group: 'Sound', run: (c) => c.ui.play('span') },
   { id: 'play-chord', words: 'Play the label as a chord', keys: ['h'], group: 'Sound', run: (c) => c.ui.play('chord') },
@@ -200,6 +207,7 @@ export function getCommand(id: string): Command {
 export function isOffered(command: Command, powers: Powers): boolean {
   if (!command.needs) return true;
   if (command.needs === 'proposals') return powers.proposals && (powers.write || command.id === 'arrows');
+  if (command.id === 'take-over') return powers.beside && powers.spans && powers.keys;
   return powers[command.needs];
 }
 

@@ -2,17 +2,16 @@
 
 import { useEffect, useMemo } from 'react';
 import { isSettled } from '@/components/score/label-look';
-import { findBar, namePlace } from '@/components/score/beats';
+import { namePlace } from '@/components/score/beats';
 import type { Score } from '@/lib/score/score';
 import { DEFAULT_CONVENTIONS } from '@/lib/theory/conventions';
-import { chooseOther, findNextOpen, runCommand } from './commands';
+import { findNextOpen, runCommand } from './commands';
 import { DeskDialogs } from './desk-dialogs';
 import { getSelected } from './desk-state';
 import type { DeskProps } from './desk-types';
 import { Ledger } from './ledger';
-import { Margin, type MarginPage } from './margin';
-import { OthersPanel } from './others-panel';
-import { RemarksPanel } from './remarks-panel';
+import { Margin } from './margin';
+import { marginPages } from './margin-pages';
 import { ScoreRegion } from './score-region';
 import { SoundStrip } from './sound-strip';
 import { Toolbar } from './toolbar';
@@ -20,7 +19,6 @@ import { useDesk, useDeskState } from './use-desk';
 import { useRemarks } from './use-remarks';
 import { useSaving } from './use-saving';
 import { useWhy } from './use-why';
-import { WhyPanel } from './why-panel';
 
 interface DeskBodyProps extends DeskProps {
   readonly xml: string;
@@ -40,32 +38,13 @@ export function DeskBody(props: DeskBodyProps) {
   const remarks = useRemarks(base);
   const label = getSelected(state);
   const why = useWhy(context.powers.proposals ? score : null, state.reading, label.id);
-  const bar = findBar(score, label.start);
   const settled = useMemo(() => state.reading.labels.filter((l) => !isGiven(l) && isSettled(l)).length, [state.reading.labels, isGiven]);
 
   useEffect(() => onProgress?.(settled, state.reading.labels.length), [onProgress, settled, state.reading.labels.length]);
 
   useEffect(() => onSaving?.(saving.state), [onSaving, saving.state]);
 
-  const pages: MarginPage[] = [
-    ...(context.powers.proposals
-      ? [
-          { value: 'why', label: 'Why', content: <WhyPanel score={score} label={label} why={why} /> },
-          {
-            value: 'others',
-            label: `Other readings ${label.others.length || ''}`,
-            content: <OthersPanel score={score} label={label} sheet={sheet} onChoose={context.powers.write ? (other) => chooseOther(context, other) : undefined} />,
-          },
-        ]
-      : []),
-    {
-      value: 'remarks',
-      label: `Remarks ${remarks.all.filter((r) => r.labelId === label.id).length || ''}`,
-      content: (
-        <RemarksPanel remarks={remarks} label={label} barIndex={bar?.index ?? 0} place={namePlace(score, label.start)} focusTurn={desk.remarkTurn} onGoTo={(labelId) => dispatch({ kind: 'select', labelId })} />
-      ),
-    },
-  ];
+  const pages = marginPages({ desk, score, sheet, state, dispatch, label, why, remarks });
 
   return (
     <div className="flex h-full min-h-0 flex-col overflow-hidden">

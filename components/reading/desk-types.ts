@@ -2,6 +2,7 @@ import type { ReactNode } from 'react';
 import type { LabelMark } from '@/components/score/lanes';
 import type { Label, Reading } from '@/lib/harmony/reading';
 import type { ConventionSheet } from '@/lib/theory/conventions';
+import type { BesideReading } from './use-beside';
 import type { SaveState } from './use-saving';
 
 /**
@@ -51,6 +52,8 @@ export interface DeskProps {
   readonly heading?: ReactNode;
   /** Right end of the toolbar: hand in, make a handout, … */
   readonly actions?: ReactNode;
+  /** Another reading of the excerpt, shown under this one with their differences named. */
+  readonly beside?: BesideReading;
   /** A tick to open on; the first label otherwise. */
   readonly openAt?: number;
   /** Told after every change of the reading: how many labels are settled. */
@@ -65,15 +68,18 @@ export interface Powers {
   readonly keys: boolean;
   /** Proposals, why and other readings are shown. */
   readonly proposals: boolean;
+  /** Another reading stands beside this one. */
+  readonly beside: boolean;
 }
 
-export function powersOf(mode: DeskMode, rules: DeskRules | undefined): Powers {
+export function powersOf(mode: DeskMode, rules: DeskRules | undefined, beside = false): Powers {
   const write = mode === 'edit' || mode === 'answer';
   return {
     write,
     spans: write && !(rules?.spansGiven ?? false),
     keys: write && !(rules?.keysGiven ?? false),
     proposals: mode === 'edit' || mode === 'read',
+    beside,
   };
 }
 

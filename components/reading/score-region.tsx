@@ -1,13 +1,14 @@
 'use client';
 
 import { useCallback, useEffect, useLayoutEffect, useMemo, useRef, useState } from 'react';
+import { BesideLane } from '@/components/score/beside-lane';
 import { BoundaryGrip } from '@/components/score/boundary-grip';
 import type { SheetGeometry } from '@/components/score/geometry';
 import { Lanes } from '@/components/score/lanes';
 import { PlayCursor } from '@/components/score/play-cursor';
 import { PointerSurface } from '@/components/score/pointer-surface';
 import { ResolutionArrows } from '@/components/score/resolution-arrows';
-import { ScoreView } from '@/components/score/score-view';
+import { LANE_ROOM, ScoreView } from '@/components/score/score-view';
 import { SpanWash } from '@/components/score/span-wash';
 import { moveBoundary } from '@/lib/harmony/edit-spans';
 import type { Label, TendencyTone } from '@/lib/harmony/reading';
@@ -21,6 +22,7 @@ import { describeLabel } from './label-words';
 import { NumeralEntry } from './numeral-entry';
 import { ScoreTable } from './score-table';
 import { SplitPicker } from './split-picker';
+import type { Beside } from './use-beside';
 import type { Desk } from './use-desk';
 import { findNumeralBefore, writeAt } from './written';
 
@@ -52,6 +54,7 @@ export function ScoreRegion(props: ScoreRegionProps) {
           lastBar={lastBar}
           zoom={desk.zoom}
           heldTick={label.start}
+          room={desk.beside ? 2 * LANE_ROOM : LANE_ROOM}
           underlay={(geometry) => <Underlay geometry={geometry} desk={desk} />}
           overlay={(geometry) => <Overlay {...props} geometry={geometry} />}
         />
@@ -132,6 +135,7 @@ function Overlay(props: ScoreRegionProps & { readonly geometry: SheetGeometry })
         } : undefined}
         entry={<Entry score={score} sheet={sheet} desk={desk} />}
       />
+      {desk.beside ? <Compared geometry={geometry} beside={desk.beside} sheet={sheet} onSelect={(l) => onSelect(labelAt(l.start)?.id ?? '', false)} /> : null}
       {powers.spans ? (
         <BoundaryGrip
           geometry={geometry}
@@ -142,6 +146,12 @@ function Overlay(props: ScoreRegionProps & { readonly geometry: SheetGeometry })
       ) : null}
     </>
   );
+}
+
+/** The reading beside this one, under its lanes. */
+function Compared({ geometry, beside, sheet, onSelect }: { readonly geometry: SheetGeometry; readonly beside: Beside; readonly sheet: ConventionSheet; onSelect(label: Label): void }) {
+  const differing = useMemo(() => new Set(beside.differences.map((d) => d.theirs.id)), [beside.differences]);
+  return <BesideLane geometry={geometry} below={LANE_ROOM} reading={beside.reading} sheet={sheet} name={beside.by} differing={differing} currentId={beside.current?.theirs.id ?? null} onSelect={onSelect} />;
 }
 
 /** The line that is typed into, or the choice of where to split. */

@@ -8,7 +8,8 @@ import type { Label } from '@/lib/harmony/reading';
 import type { Score } from '@/lib/score/score';
 import type { DeskContext } from './commands';
 import { type DeskAction, type DeskState, openDesk, reduceDesk } from './desk-state';
-import { type DeskProps, isGiven, powersOf } from './desk-types';
+import { type DeskProps, type Powers, isGiven, powersOf } from './desk-types';
+import { type Beside, useBeside } from './use-beside';
 import { type Sound, useSound } from './use-sound';
 
 /** What is open beside or over the score. */
@@ -21,6 +22,7 @@ export interface Desk {
   readonly zoom: number;
   readonly arrows: boolean;
   readonly sound: Sound;
+  readonly beside: Beside | null;
   readonly page: string;
   setPage(page: string): void;
   readonly remarkTurn: number;
@@ -44,7 +46,8 @@ export function useDesk(props: DeskProps, score: Score, startZoom: number, state
   const [marginOpen, setMarginOpen] = useState(false);
   const sound = useSound(score, state, dispatch);
   const geometries = useRef(new Map<number, SheetGeometry>());
-  const powers = useMemo(() => powersOf(mode, rules), [mode, rules]);
+  const powers = useMemo(() => powersOf(mode, rules, props.beside !== undefined), [mode, rules, props.beside]);
+  const beside = useBeside(props.beside, state, dispatch);
   const onsets = useMemo(() => onsetsOf(score, reading.start, reading.end), [score, reading.start, reading.end]);
   const given = useCallback((label: Label) => isGiven(label, rules), [rules]);
   const noteGeometry = useCallback((geometry: SheetGeometry) => {
@@ -58,6 +61,7 @@ export function useDesk(props: DeskProps, score: Score, startZoom: number, state
     score,
     onsets,
     powers,
+    beside,
     canWrite: (label) => powers.write && !given(label),
     neighbourSystem: (labelId, step) => findNeighbour([...geometries.current.values()], state.reading.labels, labelId, step),
     ui: {
@@ -71,14 +75,14 @@ export function useDesk(props: DeskProps, score: Score, startZoom: number, state
         setRemarkTurn((n) => n + 1);
       },
       zoom: (step) => setZoom((now) => stepZoom(now, step)),
-      nextTab: () => setPage((now) => nextPage(now, powers.proposals)),
+      nextTab: () => setPage((now) => nextPage(now, powers)),
       toggleArrows: () => setArrows((on) => !on),
       play: sound.play,
       playing: sound.playing,
       stop: sound.stop,
     },
   };
-  return { context, opened, open, zoom, arrows, sound, page, setPage, remarkTurn, marginOpen, setMarginOpen, isGiven: given, noteGeometry };
+  return { context, opened, open, zoom, arrows, sound, beside, page, setPage, remarkTurn, marginOpen, setMarginOpen, isGiven: given, noteGeometry };
 }
 
 export function useDeskState(props: DeskProps): [DeskState, Dispatch<DeskAction>] {
@@ -89,12 +93,13 @@ export function useDeskState(props: DeskProps): [DeskState, Dispatch<DeskAction>
   });
 }
 
-function firstPage({ mode }: DeskProps): string {
+function firstPage({ mode, beside }: DeskProps): string {
+  if (beside) return 'beside';
   return mode === 'edit' || mode === 'read' ? 'why' : 'remarks';
 }
 
-function nextPage(now: string, proposals: boolean): string {
-  const pages = proposals ? ['why', 'others', 'remarks'] : ['remarks'];
+function nextPage(now: string, powers: Powers): string {
+  const pages = [...(powers.beside ? ['beside'] : []), ...(powers.proposals ? ['why', 'others'] : []), 'remarks'];
   return pages[(pages.indexOf(now) + 1) % pages.length] ?? 'remarks';
 }
 

@@ -4,6 +4,7 @@ import { redirect } from 'next/navigation';
 import { Tag } from '@/components/ui';
 import { Desk } from '@/components/reading/desk';
 import { type ReadingHead, findReading } from '@/db/queries/readings';
+import { listReadingsOfExcerpts } from '@/db/queries/excerpts';
 import { findOwnSubmissionOfReading } from '@/db/queries/reading-submissions';
 import type { Actor } from '@/lib/auth/actor';
 import { canEditReading, canUseLibrary } from '@/lib/auth/permissions';
@@ -15,7 +16,7 @@ import { ProposingNote } from './_components/proposing-note';
 
 interface DeskPageProps {
   readonly params: Promise<{ readonly readingId: string }>;
-  readonly searchParams: Promise<{ readonly at?: string }>;
+  readonly searchParams: Promise<{ readonly at?: string; readonly beside?: string }>;
 }
 
 async function getHead(actor: Actor, readingId: string): Promise<ReadingHead> {
@@ -32,12 +33,17 @@ export async function generateMetadata({ params }: DeskPageProps): Promise<Metad
 export default async function DeskPage({ params, searchParams }: DeskPageProps) {
   const actor = await requireActor();
   const { readingId } = await params;
-  const at = Number((await searchParams).at);
+  const { at: atText, beside: besideId } = await searchParams;
+  const at = Number(atText);
   const head = await getHead(actor, readingId);
   const submissionId = head.kind === 'submission' ? await findOwnSubmissionOfReading(createDeps().db, actor, readingId) : null;
   if (submissionId) redirect(`/submissions/${submissionId}`);
   if (head.state === 'proposing' || head.state === 'failed') return <ProposingNote readingId={readingId} state={head.state} title={head.excerptTitle} />;
   const reading = await loadReading(createDeps(), actor, head);
+  const readings = canUseLibrary(actor) ? await listReadingsOfExcerpts(createDeps().db, actor, [head.excerptId]) : [];
+  const others = readings.filter((r) => r.id !== readingId && r.state !== 'proposing' && r.state !== 'failed').map((r) => ({ id: r.id, title: r.title, by: nameOwner(actor, r) }));
+  const chosen = others.find((r) => r.id === besideId);
+  const beside = chosen && (await loadBeside(actor, chosen));
   const base = `/api/readings/${readingId}`;
   return (
     <div className="h-[calc(100dvh-var(--spacing-header))]">
@@ -51,11 +57,24 @@ export default async function DeskPage({ params, searchParams }: DeskPageProps) 
         reading={reading}
         version={head.version}
         heading={<Heading head={head} actor={actor} />}
-        actions={<DeskActions readingId={readingId} excerptId={head.excerptId} staff={canUseLibrary(actor)} editable={canEditReading(actor, head.access)} />}
+        actions={<DeskActions readingId={readingId} others={others} besideId={chosen?.id ?? null} staff={canUseLibrary(actor)} editable={canEditReading(actor, head.access)} />}
+        key={chosen?.id ?? 'alone'}
+        {...(beside ? { beside } : {})}
         {...(Number.isFinite(at) ? { openAt: at } : {})}
       />
     </div>
   );
+}
+
+/** Whose a reading is, for the one who looks. */
+function nameOwner(actor: Actor, { kind, ownerId, ownerName }: { readonly kind: string; readonly ownerId: string | null; readonly ownerName: string | null }): string {
+  if (kind === 'engine') return 'the proposal';
+  return ownerId === actor.userId ? 'yours' : (ownerName ?? 'a former member');
+}
+
+async function loadBeside(actor: Actor, { id, title, by }: { readonly id: string; readonly title: string; readonly by: string }) {
+  const head = await getHead(actor, id);
+  return { title, by, reading: await loadReading(createDeps(), actor, head) };
 }
 
 function Heading({ head, actor }: { readonly head: ReadingHead; readonly actor: Actor }) {

@@ -1,0 +1,75 @@
+import type { Dispatch } from 'react';
+import { findBar, namePlace } from '@/components/score/beats';
+import type { Label, Why } from '@/lib/harmony/reading';
+import type { Score } from '@/lib/score/score';
+import type { ConventionSheet } from '@/lib/theory/conventions';
+import { chooseOther } from './commands';
+import type { DeskAction, DeskState } from './desk-state';
+import { DifferencesPanel } from './differences-panel';
+import type { MarginPage } from './margin';
+import { OthersPanel } from './others-panel';
+import { RemarksPanel } from './remarks-panel';
+import type { Desk } from './use-desk';
+import type { Remarks } from './use-remarks';
+import { WhyPanel } from './why-panel';
+
+interface Shown {
+  readonly desk: Desk;
+  readonly score: Score;
+  readonly sheet: ConventionSheet;
+  readonly state: DeskState;
+  readonly dispatch: Dispatch<DeskAction>;
+  readonly label: Label;
+  readonly why: Why | null;
+  readonly remarks: Remarks;
+}
+
+/** The pages of the margin that this desk has, in order. */
+export function marginPages(shown: Shown): MarginPage[] {
+  const { powers } = shown.desk.context;
+  return [
+    ...(shown.desk.beside ? [differencesPage(shown)] : []),
+    ...(powers.proposals ? [whyPage(shown), othersPage(shown)] : []),
+    remarksPage(shown),
+  ];
+}
+
+function differencesPage({ desk, score, sheet }: Shown): MarginPage {
+  const { beside, context } = desk;
+  const takes = context.powers.spans && context.powers.keys;
+  return {
+    value: 'beside',
+    label: `Differences ${beside?.differences.length || ''}`,
+    content: beside ? <DifferencesPanel beside={beside} score={score} sheet={sheet} takes={takes} /> : null,
+  };
+}
+
+function whyPage({ score, label, why }: Shown): MarginPage {
+  return { value: 'why', label: 'Why', content: <WhyPanel score={score} label={label} why={why} /> };
+}
+
+function othersPage({ desk, score, sheet, label }: Shown): MarginPage {
+  const { context } = desk;
+  return {
+    value: 'others',
+    label: `Other readings ${label.others.length || ''}`,
+    content: <OthersPanel score={score} label={label} sheet={sheet} onChoose={context.powers.write ? (other) => chooseOther(context, other) : undefined} />,
+  };
+}
+
+function remarksPage({ desk, score, dispatch, label, remarks }: Shown): MarginPage {
+  return {
+    value: 'remarks',
+    label: `Remarks ${remarks.all.filter((r) => r.labelId === label.id).length || ''}`,
+    content: (
+      <RemarksPanel
+        remarks={remarks}
+        label={label}
+        barIndex={findBar(score, label.start)?.index ?? 0}
+        place={namePlace(score, label.start)}
+        focusTurn={desk.remarkTurn}
+        onGoTo={(labelId) => dispatch({ kind: 'select', labelId })}
+      />
+    ),
+  };
+}
