@@ -4,7 +4,6 @@ import { useEffect, useMemo } from 'react';
 import { isSettled } from '@/components/score/label-look';
 import { namePlace } from '@/components/score/beats';
 import type { Score } from '@/lib/score/score';
-import { DEFAULT_CONVENTIONS } from '@/lib/theory/conventions';
 import { findNextOpen, runCommand } from './commands';
 import { DeskDialogs } from './desk-dialogs';
 import { getSelected } from './desk-state';
@@ -18,6 +17,7 @@ import { Toolbar } from './toolbar';
 import { useDesk, useDeskState } from './use-desk';
 import { useRemarks } from './use-remarks';
 import { useSaving } from './use-saving';
+import { useSpelling } from './use-spelling';
 import { useWhy } from './use-why';
 
 interface DeskBodyProps extends DeskProps {
@@ -30,7 +30,8 @@ const WIDE = 1024;
 /** The desk with its score read. */
 export function DeskBody(props: DeskBodyProps) {
   const { score, base, mode, firstBar, lastBar, onProgress, onSaving } = props;
-  const sheet = props.sheet ?? DEFAULT_CONVENTIONS;
+  const spelling = useSpelling(props);
+  const { sheet } = spelling;
   const [state, dispatch] = useDeskState(props);
   const desk = useDesk(props, score, typeof window !== 'undefined' && window.innerWidth < WIDE ? 0.7 : 0.8, state, dispatch);
   const { context, isGiven } = desk;
@@ -48,7 +49,7 @@ export function DeskBody(props: DeskBodyProps) {
 
   return (
     <div className="flex h-full min-h-0 flex-col overflow-hidden">
-      <Toolbar context={context} saving={context.powers.write && base ? saving : null} heading={props.heading} actions={props.actions} zoom={desk.zoom} arrows={desk.arrows} onMargin={() => desk.setMarginOpen(!desk.marginOpen)} />
+      <Toolbar context={context} spelling={spelling} saving={context.powers.write && base ? saving : null} heading={props.heading} actions={props.actions} zoom={desk.zoom} arrows={desk.arrows} onMargin={() => desk.setMarginOpen(!desk.marginOpen)} />
       <div className="relative flex min-h-0 flex-1">
         <ScoreRegion {...props} sheet={sheet} desk={desk} tendencies={desk.arrows && why ? why.tendencyTones : []} />
         <aside

@@ -4,6 +4,7 @@ import type { Label, Reading } from '@/lib/harmony/reading';
 import type { ConventionSheet } from '@/lib/theory/conventions';
 import type { BesideReading } from './use-beside';
 import type { SaveState } from './use-saving';
+import type { Spelling } from './use-spelling';
 
 /**
  * `edit`: one's own reading, or one shared for editing. `read`: someone else's. `answer`: a student's work: no proposals,
@@ -44,7 +45,12 @@ export interface DeskProps {
   readonly lastBar: number;
   readonly reading: Reading;
   readonly version: number;
+  /** The sheet that is given: a course's for its key and its students' work. */
   readonly sheet?: ConventionSheet;
+  /** Sheets to choose from, the usual one first; none where the given one holds. */
+  readonly spellings?: readonly Spelling[];
+  /** The course whose key this is: opens under its sheet, one of `spellings`. */
+  readonly courseId?: string | null;
   readonly rules?: DeskRules;
   /** By label id; in `feedback` mode. */
   readonly feedback?: Readonly<Record<string, Feedback>>;

@@ -1,12 +1,14 @@
 'use client';
 
 import type { ReactNode } from 'react';
-import { Button, Mark, Menu, MenuAction, MenuHeading, MenuRule, Spinner, classNames } from '@/components/ui';
+import { Button, Mark, Menu, MenuAction, MenuChoice, MenuHeading, MenuRule, Spinner, classNames } from '@/components/ui';
 import { type DeskContext, acceptCertain, getCommand, isOffered, runCommand } from './commands';
 import type { Saving } from './use-saving';
+import type { SpellingChoice } from './use-spelling';
 
 interface ToolbarProps {
   readonly context: DeskContext;
+  readonly spelling: SpellingChoice;
   readonly saving: Saving | null;
   readonly heading: ReactNode;
   readonly actions: ReactNode;
@@ -17,7 +19,7 @@ interface ToolbarProps {
 }
 
 /** The commands for mouse and touch; the same as the keys'. */
-export function Toolbar({ context, saving, heading, actions, zoom, arrows, onMargin }: ToolbarProps) {
+export function Toolbar({ context, spelling, saving, heading, actions, zoom, arrows, onMargin }: ToolbarProps) {
   const { powers, state } = context;
   return (
     <div role="toolbar" aria-label="Desk" className="flex flex-wrap items-center gap-x-3 gap-y-1 border-b border-rule-strong bg-paper px-3 py-1.5">
@@ -33,9 +35,9 @@ export function Toolbar({ context, saving, heading, actions, zoom, arrows, onMar
         <span className="flex items-center gap-1">
           {powers.proposals ? <Tool context={context} id="accept" kind="plain">Accept</Tool> : null}
           <Tool context={context} id="write" kind="plain">Write</Tool>
-          <MoreMenu context={context} />
         </span>
       ) : null}
+      {powers.write || spelling.spellings.length > 0 ? <MoreMenu context={context} spelling={spelling} /> : null}
       <span className="flex items-center">
         <Tool context={context} id="play" label={context.ui.playing ? 'Stop' : 'Play from here'}>{context.ui.playing ? 'Stop' : 'Play'}</Tool>
         {powers.proposals ? <Tool context={context} id="arrows" pressed={arrows}>Resolutions</Tool> : null}
@@ -85,7 +87,7 @@ const MORE = [
   { title: 'Key', ids: ['key', 'exchange'] },
 ] as const;
 
-function MoreMenu({ context }: { readonly context: DeskContext }) {
+function MoreMenu({ context, spelling }: { readonly context: DeskContext; readonly spelling: SpellingChoice }) {
   return (
     <Menu trigger={<Button size="small">More</Button>}>
       {MORE.map(({ title, ids }) => {
@@ -101,6 +103,13 @@ function MoreMenu({ context }: { readonly context: DeskContext }) {
         );
       })}
       <MenuAction onSelect={() => runCommand(context, 'remark')}>Write a remark</MenuAction>
+      {spelling.spellings.length > 0 ? (
+        <>
+          <MenuRule />
+          <MenuHeading>Labels are spelled</MenuHeading>
+          <MenuChoice value={spelling.chosenId} onValueChange={spelling.choose} choices={spelling.spellings.map(({ id, name }) => ({ value: id, label: name }))} />
+        </>
+      ) : null}
     </Menu>
   );
 }

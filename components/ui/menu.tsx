@@ -22,7 +22,7 @@ export function Menu({ trigger, align = 'end', children }: MenuProps) {
           align={align}
           sideOffset={6}
           collisionPadding={8}
-          className="z-50 min-w-48 rounded-plate border border-ink bg-sheet py-1 text-ink"
+          className="z-50 max-h-(--radix-dropdown-menu-content-available-height) min-w-48 overflow-y-auto rounded-plate border border-ink bg-sheet py-1 text-ink"
         >
           {children}
         </DropdownMenu.Content>

@@ -4,8 +4,9 @@ import { redirect } from 'next/navigation';
 import { Tag } from '@/components/ui';
 import { Desk } from '@/components/reading/desk';
 import { type ReadingHead, findReading } from '@/db/queries/readings';
+import { listCourses } from '@/db/queries/courses';
 import { listReadingsOfExcerpts } from '@/db/queries/excerpts';
-import { findOwnSubmissionOfReading } from '@/db/queries/reading-submissions';
+import { findCourseOfKey, findOwnSubmissionOfReading } from '@/db/queries/reading-submissions';
 import type { Actor } from '@/lib/auth/actor';
 import { canEditReading, canUseLibrary } from '@/lib/auth/permissions';
 import { orNotFound, requireActor } from '@/lib/http/visitor';
@@ -13,6 +14,7 @@ import { createDeps } from '@/lib/workflows/deps';
 import { loadReading } from '@/lib/workflows/read-reading';
 import { DeskActions } from './_components/desk-actions';
 import { ProposingNote } from './_components/proposing-note';
+import { listSpellings } from './_components/spellings';
 
 interface DeskPageProps {
   readonly params: Promise<{ readonly readingId: string }>;
@@ -44,6 +46,8 @@ export default async function DeskPage({ params, searchParams }: DeskPageProps) 
   const others = readings.filter((r) => r.id !== readingId && r.state !== 'proposing' && r.state !== 'failed').map((r) => ({ id: r.id, title: r.title, by: nameOwner(actor, r) }));
   const chosen = others.find((r) => r.id === besideId);
   const beside = chosen && (await loadBeside(actor, chosen));
+  const spellings = listSpellings(await listCourses(createDeps().db, actor));
+  const courseId = head.kind === 'key' ? await findCourseOfKey(createDeps().db, actor, readingId) : null;
   const base = `/api/readings/${readingId}`;
   return (
     <div className="h-[calc(100dvh-var(--spacing-header))]">
@@ -59,6 +63,8 @@ export default async function DeskPage({ params, searchParams }: DeskPageProps) 
         heading={<Heading head={head} actor={actor} />}
         actions={<DeskActions readingId={readingId} others={others} besideId={chosen?.id ?? null} staff={canUseLibrary(actor)} editable={canEditReading(actor, head.access)} />}
         key={chosen?.id ?? 'alone'}
+        spellings={spellings}
+        courseId={courseId}
         {...(beside ? { beside } : {})}
         {...(Number.isFinite(at) ? { openAt: at } : {})}
       />

@@ -7,6 +7,7 @@ import { type ConventionSheet, CONVENTION_PRESETS, DEFAULT_CONVENTIONS } from '@
 import { chooseConventions } from '../../actions';
 import { CONVENTION_CHOICES, PRESET_NAMES } from './convention-choices';
 import { ConventionSamples } from './convention-samples';
+import { TrySpelling } from './try-spelling';
 
 interface SpellingProps {
   readonly courseId: string;
@@ -49,6 +50,7 @@ export function Spelling({ courseId, conventions, runs }: SpellingProps) {
       <div>
         <h3 className="caps mb-2 text-small text-ink-soft">In print</h3>
         <ConventionSamples sheet={sheet} />
+        <TrySpelling sheet={sheet} />
         <WarningNote className="mt-4">
           The sheet decides how labels are printed and how typed ones are read; readings that exist keep their chords.
         </WarningNote>
