@@ -1,4 +1,5 @@
 /** Loopback ports: a part keeps its port from run to run as long as nobody else took it. */
+import { randomInt } from 'node:crypto';
 import { existsSync, readFileSync, writeFileSync } from 'node:fs';
 import net from 'node:net';
 import path from 'node:path';
@@ -21,7 +22,18 @@ export async function isFree(port) {
   return (await tryPort(port)) !== undefined;
 }
 
-export function anyFreePort() {
+/**
+ * Below the ports that Linux gives to outgoing connections (from 32768): one of those could be in use just when the part it
+ * was remembered for starts again.
+ */
+const FIRST_PORT = 20_000;
+const END_OF_PORTS = 32_000;
+
+export async function anyFreePort() {
+  for (let tries = 0; tries < 20; tries += 1) {
+    const port = await tryPort(randomInt(FIRST_PORT, END_OF_PORTS));
+    if (port !== undefined) return port;
+  }
   return tryPort(0);
 }
 
