@@ -45,7 +45,7 @@ export function DeskBody(props: DeskBodyProps) {
 
   useEffect(() => onSaving?.(saving.state), [onSaving, saving.state]);
 
-  const pages = marginPages({ desk, score, sheet, state, dispatch, label, why, remarks });
+  const pages = marginPages({ base, desk, score, sheet, state, dispatch, label, why, remarks });
 
   return (
     <div className="flex h-full min-h-0 flex-col overflow-hidden">

@@ -6,6 +6,7 @@ import type { ConventionSheet } from '@/lib/theory/conventions';
 import { chooseOther } from './commands';
 import type { DeskAction, DeskState } from './desk-state';
 import { DifferencesPanel } from './differences-panel';
+import { HistoryPanel } from './history-panel';
 import type { MarginPage } from './margin';
 import { OthersPanel } from './others-panel';
 import { RemarksPanel } from './remarks-panel';
@@ -14,6 +15,7 @@ import type { Remarks } from './use-remarks';
 import { WhyPanel } from './why-panel';
 
 interface Shown {
+  readonly base: string | null;
   readonly desk: Desk;
   readonly score: Score;
   readonly sheet: ConventionSheet;
@@ -31,6 +33,7 @@ export function marginPages(shown: Shown): MarginPage[] {
     ...(shown.desk.beside ? [differencesPage(shown)] : []),
     ...(powers.proposals ? [whyPage(shown), othersPage(shown)] : []),
     remarksPage(shown),
+    ...(shown.base && powers.write ? [historyPage(shown, shown.base)] : []),
   ];
 }
 
@@ -72,4 +75,8 @@ function remarksPage({ desk, score, dispatch, label, remarks }: Shown): MarginPa
       />
     ),
   };
+}
+
+function historyPage({ state, dispatch, score, sheet }: Shown, base: string): MarginPage {
+  return { value: 'history', label: 'History', content: <HistoryPanel base={base} desk={state} dispatch={dispatch} score={score} sheet={sheet} /> };
 }

@@ -1,8 +1,9 @@
 'use client';
 
 import { type FormEvent, useId, useState } from 'react';
-import { Button, ErrorNote, Mark, SkeletonRows, TextArea } from '@/components/ui';
+import { Button, ErrorNote, Mark, SkeletonRows } from '@/components/ui';
 import type { Label } from '@/lib/harmony/reading';
+import { MentionField } from './mention-field';
 import { type Remark, type Remarks, threadsOf } from './use-remarks';
 
 interface RemarksPanelProps {
@@ -27,7 +28,7 @@ export function RemarksPanel({ remarks, label, barIndex, place, focusTurn, onGoT
     <div className="flex flex-col gap-4">
       {here.length === 0 ? <p className="text-ink-soft">No remark on {place} yet.</p> : null}
       {here.map((thread) => <Thread key={thread.head.id} {...thread} remarks={remarks} />)}
-      {remarks.canRemark ? <NewThread key={`${label.id} ${focusTurn}`} autoFocus={focusTurn > 0} label={`A remark on ${place}`} onAdd={(body) => remarks.add({ body, labelId: label.id, barIndex })} /> : null}
+      {remarks.canRemark ? <NewThread key={`${label.id} ${focusTurn}`} autoFocus={focusTurn > 0} label={`A remark on ${place}`} people={remarks.people} onAdd={(body) => remarks.add({ body, labelId: label.id, barIndex })} /> : null}
       {elsewhere.length > 0 ? (
         <details>
           <summary className="caps text-small text-ink-soft">Elsewhere in this reading ({elsewhere.length})</summary>
@@ -53,7 +54,7 @@ function Thread({ head, answers, remarks }: { readonly head: Remark; readonly an
       {head.resolved ? <Mark tone="settled" shape="check">resolved</Mark> : null}
       {remarks.canRemark ? (
         <div className="flex flex-wrap gap-x-3">
-          {head.resolved ? null : <NewThread small label={`Answer ${head.by}`} onAdd={(body) => remarks.add({ body, threadId: head.id })} />}
+          {head.resolved ? null : <NewThread small label={`Answer ${head.by}`} people={remarks.people} onAdd={(body) => remarks.add({ body, threadId: head.id })} />}
           <button type="button" className="link min-h-6 text-small" onClick={async () => setTrouble(await remarks.change(head.id, { resolved: !head.resolved }))}>
             {head.resolved ? 'Open again' : 'Resolve'}
           </button>
@@ -76,7 +77,7 @@ function RemarkView({ remark, remarks, isAnswer }: { readonly remark: Remark; re
         {remark.edited ? ' · reworded' : ''}
       </p>
       {rewording ? (
-        <RemarkForm label="Reword" start={remark.body} autoFocus onSend={async (body) => {
+        <RemarkForm label="Reword" people={remarks.people} start={remark.body} autoFocus onSend={async (body) => {
           const failed = await remarks.change(remark.id, { body });
           if (failed === null) setRewording(false);
           return failed;
@@ -97,10 +98,11 @@ interface NewThreadProps {
   readonly label: string;
   readonly small?: boolean;
   readonly autoFocus?: boolean;
+  people(): Promise<readonly string[]>;
   onAdd(body: string): Promise<string | null>;
 }
 
-function NewThread({ label, small = false, autoFocus = false, onAdd }: NewThreadProps) {
+function NewThread({ label, small = false, autoFocus = false, people, onAdd }: NewThreadProps) {
   const [open, setOpen] = useState(!small);
   if (!open) return <button type="button" className="link min-h-6 text-small" onClick={() => setOpen(true)}>Answer</button>;
   const send = async (body: string) => {
@@ -108,18 +110,19 @@ function NewThread({ label, small = false, autoFocus = false, onAdd }: NewThread
     if (trouble === null && small) setOpen(false);
     return trouble;
   };
-  return <RemarkForm label={label} start="" autoFocus={autoFocus || small} onSend={send} onLeave={small ? () => setOpen(false) : undefined} />;
+  return <RemarkForm label={label} people={people} start="" autoFocus={autoFocus || small} onSend={send} onLeave={small ? () => setOpen(false) : undefined} />;
 }
 
 interface RemarkFormProps {
   readonly label: string;
   readonly start: string;
   readonly autoFocus?: boolean;
+  people(): Promise<readonly string[]>;
   onSend(body: string): Promise<string | null>;
   onLeave?: (() => void) | undefined;
 }
 
-function RemarkForm({ label, start, autoFocus = false, onSend, onLeave }: RemarkFormProps) {
+function RemarkForm({ label, start, autoFocus = false, people, onSend, onLeave }: RemarkFormProps) {
   const [body, setBody] = useState(start);
   const [busy, setBusy] = useState(false);
   const [trouble, setTrouble] = useState<string | null>(null);
@@ -136,8 +139,7 @@ function RemarkForm({ label, start, autoFocus = false, onSend, onLeave }: Remark
   return (
     <form onSubmit={submit} className="flex w-full flex-col gap-1.5">
       <label htmlFor={id} className="text-small">{label}</label>
-      <TextArea id={id} rows={2} value={body} autoFocus={autoFocus} maxLength={4000} onChange={(event) => setBody(event.target.value)} onKeyDown={(event) => {
-        event.stopPropagation();
+      <MentionField id={id} rows={2} value={body} autoFocus={autoFocus} maxLength={4000} findPeople={people} onChange={setBody} onKeyDown={(event) => {
         if (event.key === 'Enter' && (event.ctrlKey || event.metaKey)) void submit();
       }} />
       {trouble ? <p role="alert" className="text-small text-madder">{trouble}</p> : null}

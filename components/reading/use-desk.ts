@@ -43,7 +43,7 @@ export function useDesk(props: DeskProps, score: Score, startZoom: number, state
   const [arrows, setArrows] = useState(true);
   const [page, setPage] = useState(firstPage(props));
   const [remarkTurn, setRemarkTurn] = useState(0);
-  const [marginOpen, setMarginOpen] = useState(false);
+  const [marginOpen, setMarginOpen] = useState(props.openPage !== undefined);
   const sound = useSound(score, state, dispatch);
   const geometries = useRef(new Map<number, SheetGeometry>());
   const powers = useMemo(() => powersOf(mode, rules, props.beside !== undefined), [mode, rules, props.beside]);
@@ -75,7 +75,7 @@ export function useDesk(props: DeskProps, score: Score, startZoom: number, state
         setRemarkTurn((n) => n + 1);
       },
       zoom: (step) => setZoom((now) => stepZoom(now, step)),
-      nextTab: () => setPage((now) => nextPage(now, powers)),
+      nextTab: () => setPage((now) => nextPage(now, powers, props.base !== null)),
       toggleArrows: () => setArrows((on) => !on),
       play: sound.play,
       playing: sound.playing,
@@ -93,13 +93,14 @@ export function useDeskState(props: DeskProps): [DeskState, Dispatch<DeskAction>
   });
 }
 
-function firstPage({ mode, beside }: DeskProps): string {
+function firstPage({ mode, beside, openPage }: DeskProps): string {
+  if (openPage) return openPage;
   if (beside) return 'beside';
   return mode === 'edit' || mode === 'read' ? 'why' : 'remarks';
 }
 
-function nextPage(now: string, powers: Powers): string {
-  const pages = [...(powers.beside ? ['beside'] : []), ...(powers.proposals ? ['why', 'others'] : []), 'remarks'];
+function nextPage(now: string, powers: Powers, isKept: boolean): string {
+  const pages = [...(powers.beside ? ['beside'] : []), ...(powers.proposals ? ['why', 'others'] : []), 'remarks', ...(isKept && powers.write ? ['history'] : [])];
   return pages[(pages.indexOf(now) + 1) % pages.length] ?? 'remarks';
 }
 

@@ -31,6 +31,8 @@ export interface Remarks {
   add(remark: NewRemark): Promise<string | null>;
   change(remarkId: string, change: { body?: string; resolved?: boolean }): Promise<string | null>;
   takeBack(remarkId: string): Promise<string | null>;
+  /** Names that can be written as `@Name`; none when they cannot be had. */
+  people(): Promise<readonly string[]>;
   reload(): void;
 }
 
@@ -75,6 +77,10 @@ export function useRemarks(base: string | null): Remarks {
     canRemark,
     add: (remark) => call(`${base}/remarks`, 'POST', remark),
     change: (remarkId, change) => call(`${base}/remarks/${remarkId}`, 'PATCH', change),
+    people: async () => {
+      const response = await fetch(`${base}/people`).catch(() => null);
+      return response?.ok ? ((await response.json()) as { people: string[] }).people : [];
+    },
     takeBack: (remarkId) => call(`${base}/remarks/${remarkId}`, 'DELETE'),
     reload: () => void reload(),
   };

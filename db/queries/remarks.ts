@@ -1,6 +1,6 @@
-import { and, asc, eq, isNull } from 'drizzle-orm';
+import { and, asc, eq, isNull, or } from 'drizzle-orm';
 import type { Db } from '@/db/client';
-import { remarks, users } from '@/db/schema';
+import { labels, remarks, users } from '@/db/schema';
 
 export interface RemarkRow {
   readonly id: string;
@@ -82,4 +82,19 @@ export async function deleteRemark(db: Db, remarkId: string, authorId: string, d
     .set({ deletedAt })
     .where(and(eq(remarks.id, remarkId), eq(remarks.authorId, authorId)));
   return result.affectedRows === 1;
+}
+
+/** Who wrote in a thread, by user id, each once. `threadId` is the remark it began with. */
+export async function listThreadWriters(db: Db, threadId: string): Promise<string[]> {
+  const rows = await db
+    .selectDistinct({ authorId: remarks.authorId })
+    .from(remarks)
+    .where(and(or(eq(remarks.id, threadId), eq(remarks.threadId, threadId)), isNull(remarks.deletedAt)));
+  return rows.map((row) => row.authorId);
+}
+
+/** The tick a label of a reading begins at; null when it is gone. */
+export async function findLabelStart(db: Db, readingId: string, labelId: string): Promise<number | null> {
+  const [row] = await db.select({ start: labels.startTick }).from(labels).where(and(eq(labels.id, labelId), eq(labels.readingId, readingId)));
+  return row?.start ?? null;
 }

@@ -1,4 +1,4 @@
-import { and, asc, desc, eq, gt, inArray, isNull, sql } from 'drizzle-orm';
+import { and, asc, desc, eq, gt, inArray, isNull, lt, sql } from 'drizzle-orm';
 import type { Db } from '@/db/client';
 import { keyRegions, labelAlternatives, labels, readings, remarks, revisions, users } from '@/db/schema';
 import type { StoredLabel, StoredRegion } from './reading-rows';
@@ -22,21 +22,35 @@ export interface StoredRevision {
   readonly createdAt: Date;
 }
 
+const REVISION_COLUMNS = {
+  version: revisions.version,
+  editId: revisions.id,
+  before: revisions.before,
+  after: revisions.after,
+  by: users.name,
+  createdAt: revisions.createdAt,
+};
+
 /** The edits of a reading after `since`, in order. Whoever calls it has checked who may see the reading. */
 export async function unsafeListRevisions(db: Db, readingId: string, since: number): Promise<StoredRevision[]> {
   const rows = await db
-    .select({
-      version: revisions.version,
-      editId: revisions.id,
-      before: revisions.before,
-      after: revisions.after,
-      by: users.name,
-      createdAt: revisions.createdAt,
-    })
+    .select(REVISION_COLUMNS)
     .from(revisions)
     .leftJoin(users, eq(users.id, revisions.authorId))
     .where(and(eq(revisions.readingId, readingId), gt(revisions.version, since)))
     .orderBy(asc(revisions.version));
+  return rows.map((row) => ({ ...row, before: row.before as StoredSide, after: row.after as StoredSide }));
+}
+
+/** Some edits of a reading, the newest first: `limit` of those before version `before`. Whoever calls it has checked who may see them. */
+export async function unsafeListRevisionsBack(db: Db, readingId: string, before: number, limit: number): Promise<StoredRevision[]> {
+  const rows = await db
+    .select(REVISION_COLUMNS)
+    .from(revisions)
+    .leftJoin(users, eq(users.id, revisions.authorId))
+    .where(and(eq(revisions.readingId, readingId), lt(revisions.version, before)))
+    .orderBy(desc(revisions.version))
+    .limit(limit);
   return rows.map((row) => ({ ...row, before: row.before as StoredSide, after: row.after as StoredSide }));
 }
 

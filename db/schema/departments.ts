@@ -22,6 +22,8 @@ export interface UserPreferences {
   readonly theme?: 'system' | 'day' | 'night';
   /** Which department a person of several is working in. */
   readonly departmentId?: string;
+  /** Mail about remarks; on unless switched off. */
+  readonly remarkMail?: boolean;
 }
 
 export const users = mysqlTable('users', {

@@ -1,5 +1,5 @@
 import { ticks } from '../score/score';
-import { type Change, applyChange, changeBetween, findKeyAt } from './edit';
+import { type Change, applyChange, changeBetween, findKeyAt, invertChange } from './edit';
 import { layRegion } from './edit-spans';
 import type { Label, Reading } from './reading';
 
@@ -40,5 +40,16 @@ export function foldChanges(reading: Reading, changes: readonly Change[]): Readi
   return changes.reduce((current, change) => {
     const applied = applyChange(current, change);
     return applied.ok ? applied.value : current;
+  }, reading);
+}
+
+/**
+ * The reading as it was before some changes: `changes` in the order they were made, the last of them the reading's newest.
+ * Null when one of them does not fit, so that they are not all of what happened since.
+ */
+export function rewind(reading: Reading, changes: readonly Change[]): Reading | null {
+  return changes.reduceRight<Reading | null>((current, change) => {
+    const applied = current && applyChange(current, invertChange(change));
+    return applied?.ok ? applied.value : null;
   }, reading);
 }

@@ -34,6 +34,19 @@ export async function chooseDepartment(
   return ok(null);
 }
 
+export const chooseRemarkMailInput = z.object({ remarkMail: z.boolean() });
+
+/** Switches the mails about remarks on or off. */
+export async function chooseRemarkMail(
+  deps: Deps,
+  actor: Actor,
+  { remarkMail }: z.output<typeof chooseRemarkMailInput>,
+): Promise<Result<null, AppError>> {
+  const { preferences } = await getOwnAccount(deps.db, actor);
+  await deps.db.update(users).set({ preferences: { ...preferences, remarkMail } }).where(eq(users.id, actor.userId));
+  return ok(null);
+}
+
 export const signOutEverywhereInput = z.object({});
 
 /** Ends every session of the person on every device, and the links that are still on their way. */

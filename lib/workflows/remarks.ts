@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { listAudience } from '@/db/queries/reading-audience';
 import { findReading } from '@/db/queries/readings';
 import {
   type RemarkRow,
@@ -13,8 +14,9 @@ import type { Actor } from '@/lib/auth/actor';
 import { canRemarkOnReading } from '@/lib/auth/permissions';
 import { type AppError, appError } from '@/lib/errors';
 import { type Result, err, ok } from '@/lib/result';
-import type { Deps } from './deps';
+import { type Deps, inTransaction } from './deps';
 import { readingInput } from './read-reading';
+import { mailAboutRemark } from './remark-mail';
 
 /** A remark as it is shown; times as ISO text. */
 export interface Remark {
@@ -63,16 +65,19 @@ export const addRemarkInput = readingInput.extend({
   threadId: z.uuid().nullable().default(null),
 });
 
-/** Adds a remark on a label, on a bar or on the whole; an answer takes its thread's place. Answers with all remarks. */
+/** Adds a remark on a label, on a bar or on the whole; an answer takes its thread's place. Answers with all remarks; whom it concerns gets a mail. */
 export async function addRemark(deps: Deps, actor: Actor, input: z.infer<typeof addRemarkInput>): Promise<Result<Remarks, AppError>> {
-  const allowed = await canRemarkHere(deps, actor, input.readingId);
-  if (!allowed) return err(appError('not_found'));
+  const head = await findReading(deps.db, actor, input.readingId, deps.now());
+  if (!head || !canRemarkOnReading(actor, head.access)) return err(appError('not_found'));
   const thread = input.threadId ? await unsafeFindRemark(deps.db, input.readingId, input.threadId) : null;
   if (input.threadId && !thread) return err(appError('not_found', 'The remark you answer was taken back.'));
   const { readingId, body: text } = input;
   const place = thread ? { labelId: thread.labelId, barIndex: thread.barIndex } : { labelId: input.labelId, barIndex: input.barIndex };
   const threadId = thread ? (thread.threadId ?? thread.id) : null;
-  await insertRemark(deps.db, { id: deps.newId(), readingId, threadId, ...place, authorId: actor.userId, body: text, createdAt: deps.now() });
+  await inTransaction(deps, async (inside) => {
+    await insertRemark(inside.db, { id: inside.newId(), readingId, threadId, ...place, authorId: actor.userId, body: text, createdAt: inside.now() });
+    await mailAboutRemark(inside, actor, head, { body: text, threadId, labelId: place.labelId });
+  });
   return ok(await allRemarks(deps, actor, readingId, true));
 }
 
@@ -101,4 +106,17 @@ export async function takeBackRemark(deps: Deps, actor: Actor, input: z.infer<ty
   const remark = await unsafeFindRemark(deps.db, input.readingId, input.remarkId);
   if (!remark || !(await deleteRemark(deps.db, remark.id, actor.userId, deps.now()))) return err(appError('not_found'));
   return ok(await allRemarks(deps, actor, input.readingId, true));
+}
+
+export interface RemarkPeople {
+  /** Names that can be written as `@Name`, in order; not one's own. */
+  readonly people: readonly string[];
+}
+
+/** Who can be named in a remark on a reading: whoever else may write one. */
+export async function listRemarkPeople(deps: Deps, actor: Actor, { readingId }: z.infer<typeof readingInput>): Promise<Result<RemarkPeople, AppError>> {
+  const head = await findReading(deps.db, actor, readingId, deps.now());
+  if (!head || !canRemarkOnReading(actor, head.access)) return err(appError('not_found'));
+  const audience = await listAudience(deps.db, actor, head);
+  return ok({ people: [...new Set(audience.filter((p) => p.userId !== actor.userId).map((p) => p.name))] });
 }

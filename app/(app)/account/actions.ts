@@ -7,6 +7,8 @@ import {
   changeNameInput,
   chooseDepartment,
   chooseDepartmentInput,
+  chooseRemarkMail,
+  chooseRemarkMailInput,
   signOutEverywhere,
   signOutEverywhereInput,
 } from '@/lib/workflows/change-own-account';
@@ -25,6 +27,11 @@ export const savePassword = publicFormAction({ name: 'account.change_password', 
 export const workInDepartment = action(
   { name: 'account.choose_department', can: canBeHere, input: chooseDepartmentInput, revalidate: wholeSite },
   chooseDepartment,
+);
+
+export const saveRemarkMail = action(
+  { name: 'account.choose_remark_mail', can: canBeHere, input: chooseRemarkMailInput, revalidate: () => ['/account'] },
+  chooseRemarkMail,
 );
 
 export const endSessions = action(

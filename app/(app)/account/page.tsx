@@ -8,6 +8,7 @@ import { DepartmentChoice } from './_components/department-choice';
 import { EraseAccount } from './_components/erase-account';
 import { NameForm } from './_components/name-form';
 import { PasswordForm } from './_components/password-form';
+import { RemarkMail } from './_components/remark-mail';
 import { SignOutEverywhere } from './_components/sign-out-everywhere';
 
 export const metadata: Metadata = { title: 'Account' };
@@ -30,6 +31,9 @@ export default async function AccountPage() {
       </Section>
       <Section title={account.hasPassword ? 'Change the password' : 'Choose a password'}>
         <PasswordForm email={account.email} hasPassword={account.hasPassword} fresh={fresh} />
+      </Section>
+      <Section title="Mail">
+        <RemarkMail wanted={account.preferences.remarkMail ?? true} />
       </Section>
       <Section title="Devices">
         <SignOutEverywhere />

@@ -32,6 +32,7 @@ export const people: Cases = {
     },
     expected: ONESELF,
   },
+  'account.choose_remark_mail': { input: () => ({ remarkMail: false }), expected: ONESELF },
   'account.choose_department': {
     input: (world, _deps, column) => ({ departmentId: column === 'anonymous' ? world.departmentId : world[column].departmentId }),
     expected: ONESELF,

@@ -83,11 +83,15 @@ export const readingCases: Cases = {
   ...onEach('readings.news', reads, SEEN),
   ...onEach('readings.score', reads, SEEN),
   ...onEach('readings.edit', edits, EDITED),
+  ...onEach('readings.revisions', reads, EDITED),
   ...onEach('remarks.list', reads, SEEN),
+  ...onEach('remarks.people', reads, SEEN),
   ...onEach('remarks.add', remarksOn, SEEN),
   'readings.read (work)': { input: readsWork, expected: WORK_READERS },
   'readings.score (work)': { input: readsWork, expected: WORK_READERS },
   'readings.edit (work)': { input: namesFirst(readingOfWork), expected: may('student') },
+  'readings.revisions (work)': { input: readsWork, expected: may('student') },
+  'remarks.people (work)': { input: readsWork, expected: WORK_READERS },
   'remarks.list (work)': { input: readsWork, expected: WORK_READERS },
   'readings.read (key that is shown)': {
     input: async (world, deps) => {
