@@ -133,6 +133,28 @@ test('an excerpt is cut by printed numbers or on the score, and its chords are p
   await expect(page.getByRole('status').filter({ hasText: /1 of \d+ scores/ })).toBeVisible();
 });
 
+test('the analysis that a file carries becomes a reading', async ({ page }) => {
+  const title = `Sung ${RUN}`;
+  await page.goto('/library');
+  await chooseFiles(page, upload('sung.musicxml', musicXml({ title, bars: 8, lyrics: ['I', 'V7', 'I', 'so', 'I', 'G: I', '', ''] })));
+  await state(page, 'Written by the tests', 'Public domain');
+  await page.getByRole('button', { name: 'Add the score to the library' }).click();
+  await expect(page.getByText('in the library', { exact: true })).toBeVisible({ timeout: 60_000 });
+  await page.getByRole('link', { name: title }).first().click();
+  await page.getByRole('button', { name: 'Cut the excerpt' }).click();
+  await page.getByRole('button', { name: 'Use the file’s own analysis' }).click();
+  const dialog = page.getByRole('dialog');
+  await expect(dialog.getByLabel('Numerals written as lyrics')).toBeChecked();
+  await expect(dialog.getByText('5 labels in these bars')).toBeVisible();
+  await expect(dialog.getByRole('row')).toHaveCount(6);
+  await dialog.getByText('One label could not be read').click();
+  await expect(dialog.getByText('Bar 4: so')).toBeVisible();
+  await expectNoViolation(page);
+  await dialog.getByRole('button', { name: 'Make it a reading' }).click();
+  await expect(page).toHaveURL(/\/desk\//, { timeout: 60_000 });
+  await expect(page.locator('[data-numeral]').first()).toBeVisible({ timeout: 60_000 });
+});
+
 test('a score that excerpts were cut from stays; one without is deleted and brought back', async ({ page }) => {
   const title = await addScore(page, `Gone ${RUN}`);
   await page.getByRole('link', { name: title }).first().click();

@@ -146,9 +146,7 @@ function Preview({ written }: { readonly written: WrittenLabels }) {
             <Row key={bar.index}>
               <Th scope="row" className="tabular w-16">{bar.number || '·'}</Th>
               <Td>
-                <span className="flex flex-wrap items-baseline gap-x-4 gap-y-1">
-                  {labels.map((label) => <WrittenLabel key={label.start} label={label} before={all[all.indexOf(label) - 1]} />)}
-                </span>
+                {labels.map((label) => <WrittenLabel key={label.start} label={label} before={all[all.indexOf(label) - 1]} />)}
               </Td>
             </Row>
           ))}
@@ -162,8 +160,8 @@ function Preview({ written }: { readonly written: WrittenLabels }) {
 function WrittenLabel({ label, before }: { readonly label: Annotation; readonly before: Annotation | undefined }) {
   const isNew = !before || !equalKeys(before.key, label.key);
   return (
-    <span className="inline-flex items-baseline gap-1.5">
-      {isNew ? <span className="text-ink-soft"><KeyName keyValue={label.key} />:</span> : null}
+    <span className="mr-5 whitespace-nowrap">
+      {isNew ? <span className="mr-1.5 text-ink-soft"><KeyName keyValue={label.key} />:</span> : null}
       {label.numeral ? <NumeralText parts={typesetNumeral(label.numeral, label.key.mode)} className="text-lead" /> : <span className="text-ink-soft">no chord</span>}
     </span>
   );
