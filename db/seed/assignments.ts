@@ -37,12 +37,17 @@ async function prepare(deps: Deps, plan: Plan): Promise<Prepared> {
   const { by, course, excerpt, readingId, title, instructions, dueInDays } = plan;
   const actor = actorOf(by);
   const { assignmentId } = must(await createAssignment(deps, actor, { courseId: course.id, title, readingId, excerptId: excerpt.excerptId }));
-  const dueAt = dueInDays === null ? null : new Date(deps.now().getTime() + dueInDays * 86_400_000);
+  const dueAt = dueInDays === null ? null : atFive(new Date(deps.now().getTime() + dueInDays * 86_400_000));
   await deps.db.update(assignments).set({ instructions, dueAt, showKeyAfterRelease: true }).where(eq(assignments.id, assignmentId));
   const [row] = await deps.db.select({ key: assignments.keyReadingId }).from(assignments).where(eq(assignments.id, assignmentId));
   if (!row) throw new Error('the assignment was not kept');
   if (plan.asked) await ask(deps, plan, assignmentId, row.key);
   return { assignmentId, keyReadingId: row.key };
+}
+
+/** The afternoon of that day: nobody sets work for 13:21. */
+function atFive(day: Date): Date {
+  return new Date(Date.UTC(day.getUTCFullYear(), day.getUTCMonth(), day.getUTCDate(), 17));
 }
 
 async function ask(deps: Deps, plan: Plan, assignmentId: string, keyReadingId: string): Promise<void> {
@@ -137,8 +142,11 @@ export async function seedStaircaseAssignment(deps: Deps, excerpt: SeededExcerpt
   must(await openAssignment(daysAgo(deps, 16), actor, prepared));
   await handInAll(daysAgo(deps, 10), prepared, STAIRCASE_ANSWERS);
   must(await closeAssignment(daysAgo(deps, 8), actor, prepared));
-  const submissions = await listSubmissions(deps.db, actor, prepared.assignmentId);
-  must(await releaseMarks(daysAgo(deps, 7), actor, { assignmentId: prepared.assignmentId, submissionIds: submissions.map(({ id }) => id) }));
+  const { assignmentId, keyReadingId } = prepared;
+  const submissionIds = (await listSubmissions(deps.db, actor, assignmentId)).map(({ id }) => id);
+  const answers = (await contentOf(deps, keyReadingId)).labels.map(({ start }) => ({ startTick: start, submissionIds }));
+  must(await settleMarks(daysAgo(deps, 7), actor, { assignmentId, answers, settled: true }));
+  must(await releaseMarks(daysAgo(deps, 7), actor, { assignmentId, submissionIds }));
 }
 
 /** One to do in the first-year course, one draft in the seminar. */

@@ -19,8 +19,8 @@ export function WorkTable({ caption, work, now, inCourse = false }: WorkTablePro
       <thead>
         <Row>
           <Th>Assignment</Th>
-          {inCourse ? null : <Th>Course</Th>}
-          <Th>Due</Th>
+          {inCourse ? null : <Th className="hidden md:table-cell">Course</Th>}
+          <Th className="hidden sm:table-cell">Due</Th>
           <Th>State</Th>
           <Th className="text-right">Points</Th>
         </Row>
@@ -28,9 +28,13 @@ export function WorkTable({ caption, work, now, inCourse = false }: WorkTablePro
       <tbody>
         {work.map((one) => (
           <Row key={one.assignmentId}>
-            <Th scope="row"><Link href={linkOf(one)} className="link font-book text-lead">{one.assignmentTitle}</Link></Th>
-            {inCourse ? null : <Td className="text-ink-soft">{one.courseTitle}</Td>}
-            <Td><Due work={one} now={now} /></Td>
+            <Th scope="row">
+              <Link href={linkOf(one)} className="link font-book text-lead">{one.assignmentTitle}</Link>
+              {inCourse ? null : <p className="text-small font-normal text-ink-soft md:hidden">{one.courseTitle}</p>}
+              <div className="text-small font-normal sm:hidden"><Due work={one} now={now} /></div>
+            </Th>
+            {inCourse ? null : <Td className="hidden text-ink-soft md:table-cell">{one.courseTitle}</Td>}
+            <Td className="hidden sm:table-cell"><Due work={one} now={now} /></Td>
             <Td><WorkStateMark state={one.submission?.state ?? null} /></Td>
             <Td className="tabular text-right whitespace-nowrap">{pointsOf(one)}</Td>
           </Row>
