@@ -22,9 +22,9 @@ export function CourseTable({ courses, mayCreate }: CourseTableProps) {
       <thead>
         <Row>
           <Th>Course</Th>
-          <Th>Term</Th>
-          <Th className="text-right">Students</Th>
-          <Th className="text-right">Open assignments</Th>
+          <Th className="hidden sm:table-cell">Term</Th>
+          <Th className="hidden text-right sm:table-cell">Students</Th>
+          <Th className="hidden text-right md:table-cell">Open assignments</Th>
           <Th className="text-right">To mark</Th>
         </Row>
       </thead>
@@ -44,10 +44,11 @@ function CourseLine({ course }: { readonly course: ListedCourse }) {
           {courseRole === 'assistant' ? <Tag>assistant</Tag> : null}
           {archivedAt ? <StateMark state="closed">over</StateMark> : null}
         </span>
+        <p className="text-small font-normal text-ink-soft sm:hidden">{[term, students === 1 ? '1 student' : `${students} students`].filter(Boolean).join(', ')}</p>
       </Th>
-      <Td className="whitespace-nowrap">{term}</Td>
-      <Td className="tabular text-right">{students}</Td>
-      <Td className="tabular text-right">{openAssignments}</Td>
+      <Td className="hidden whitespace-nowrap sm:table-cell">{term}</Td>
+      <Td className="tabular hidden text-right sm:table-cell">{students}</Td>
+      <Td className="tabular hidden text-right md:table-cell">{openAssignments}</Td>
       <Td className="tabular text-right">{toMark > 0 ? <StateMark state="waiting">{toMark}</StateMark> : '–'}</Td>
     </Row>
   );

@@ -45,8 +45,8 @@ export function WorkList({ assignment, students, submissions, runs, over }: Work
           <Row>
             <Th>Student</Th>
             <Th>State</Th>
-            <Th className="text-right">Attempt</Th>
-            <Th>Handed in</Th>
+            <Th className="hidden text-right sm:table-cell">Attempt</Th>
+            <Th className="hidden sm:table-cell">Handed in</Th>
             <Th className="text-right">Points</Th>
           </Row>
         </thead>
@@ -56,8 +56,8 @@ export function WorkList({ assignment, students, submissions, runs, over }: Work
             <Row key={student.userId}>
               <Th scope="row">{student.name}</Th>
               <Td><WorkStateMark state={null} /></Td>
-              <Td className="text-right">–</Td>
-              <Td>–</Td>
+              <Td className="hidden text-right sm:table-cell">–</Td>
+              <Td className="hidden sm:table-cell">–</Td>
               <Td className="text-right">–</Td>
             </Row>
           ))}
@@ -74,10 +74,11 @@ function WorkLine({ row, assignment }: { readonly row: WorkRow; readonly assignm
     <Row>
       <Th scope="row">
         {state === 'working' ? studentName : <Link href={`/assignments/${assignment.id}/marking?student=${row.id}`} className="link">{studentName}</Link>}
+        {handedInAt ? <p className="text-small font-normal text-ink-soft sm:hidden"><LocalTime at={handedInAt} />{late ? ', late' : ''}</p> : null}
       </Th>
       <Td><WorkStateMark state={state} /></Td>
-      <Td className="tabular text-right">{attempt}</Td>
-      <Td>
+      <Td className="tabular hidden text-right sm:table-cell">{attempt}</Td>
+      <Td className="hidden sm:table-cell">
         <span className="flex flex-wrap items-baseline gap-x-2">
           {handedInAt ? <LocalTime at={handedInAt} /> : '–'}
           {late ? <Mark tone="eye" shape="triangle">late</Mark> : null}

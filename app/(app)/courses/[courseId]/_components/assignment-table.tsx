@@ -27,9 +27,9 @@ export function AssignmentTable({ assignments, courseId, prepares }: AssignmentT
         <Row>
           <Th>Assignment</Th>
           <Th>State</Th>
-          <Th>Due</Th>
-          <Th className="text-right">Handed in</Th>
-          <Th className="text-right">Released</Th>
+          <Th className="hidden sm:table-cell">Due</Th>
+          <Th className="hidden text-right sm:table-cell">Handed in</Th>
+          <Th className="hidden text-right md:table-cell">Released</Th>
           <Th><span className="sr-only">Marking</span></Th>
         </Row>
       </thead>
@@ -45,11 +45,12 @@ function AssignmentLine({ assignment }: { readonly assignment: ListedAssignment 
       <Th scope="row">
         <Link href={`/assignments/${id}`} className="link font-book text-lead">{title}</Link>
         <p className="text-small font-normal text-ink-soft">{[composer, excerptTitle].filter(Boolean).join(', ')}</p>
+        <p className="text-small font-normal text-ink-soft sm:hidden">{handedIn} of {students} handed in{dueAt ? <>, due <LocalTime at={dueAt.toISOString()} /></> : null}</p>
       </Th>
       <Td><AssignmentStateMark state={state} /></Td>
-      <Td>{dueAt ? <LocalTime at={dueAt.toISOString()} /> : <span className="text-ink-soft">no date</span>}</Td>
-      <Td className="tabular text-right whitespace-nowrap">{handedIn} of {students}</Td>
-      <Td className="tabular text-right">{released}</Td>
+      <Td className="hidden sm:table-cell">{dueAt ? <LocalTime at={dueAt.toISOString()} /> : <span className="text-ink-soft">no date</span>}</Td>
+      <Td className="tabular hidden text-right whitespace-nowrap sm:table-cell">{handedIn} of {students}</Td>
+      <Td className="tabular hidden text-right md:table-cell">{released}</Td>
       <Td className="text-right">{handedIn > 0 ? <ButtonLink size="small" href={`/assignments/${id}/marking`}>Mark</ButtonLink> : null}</Td>
     </Row>
   );

@@ -23,7 +23,7 @@ export function RosterTable({ courseId, roster, runs, ownId }: RosterTableProps)
         <thead>
           <Row>
             <Th>Name</Th>
-            <Th>E-mail</Th>
+            <Th className="hidden sm:table-cell">E-mail</Th>
             <Th>In the course</Th>
             {runs ? <Th><span className="sr-only">Remove</span></Th> : null}
           </Row>
@@ -31,8 +31,8 @@ export function RosterTable({ courseId, roster, runs, ownId }: RosterTableProps)
         <tbody>
           {roster.map((row) => (
             <Row key={row.userId}>
-              <Th scope="row">{row.name}{row.userId === ownId ? <span className="text-ink-soft"> (you)</span> : null}</Th>
-              <Td className="break-all">{row.email}</Td>
+              <Th scope="row">{row.name}{row.userId === ownId ? <span className="text-ink-soft"> (you)</span> : null}<p className="text-small font-normal break-all text-ink-soft sm:hidden">{row.email}</p></Th>
+              <Td className="hidden break-all sm:table-cell">{row.email}</Td>
               <Td>{row.courseRole}</Td>
               {runs ? (
                 <Td className="text-right">
