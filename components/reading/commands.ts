@@ -2,7 +2,8 @@ import type { Dispatch } from 'react';
 import { findBar } from '@/components/score/beats';
 import { isSettled } from '@/components/score/label-look';
 import { type EditResult, acceptLabels, changeBetween, findSuggestions, setNumeral } from '@/lib/harmony/edit';
-import { changeKey, exchangeFrame } from '@/lib/harmony/edit-keys';
+import { changeKey, exchangeFrame, togglePivot } from '@/lib/harmony/edit-keys';
+import { type LabelPattern, layPattern, takePattern } from '@/lib/harmony/edit-pattern';
 import { mergeWithNext, moveBoundary, splitLabel } from '@/lib/harmony/edit-spans';
 import type { Label, OtherReading } from '@/lib/harmony/reading';
 import type { Score } from '@/lib/score/score';
@@ -37,6 +38,12 @@ export interface DeskUi {
   zoom(step: -1 | 1): void;
   nextTab(): void;
   toggleArrows(): void;
+  /** Opens the choice of a certainty from which on all is accepted. */
+  acceptFrom(): void;
+  /** Puts the keyboard on the notes left over, in the margin. */
+  nameTones(): void;
+  readonly pattern: LabelPattern | null;
+  keepPattern(pattern: LabelPattern): void;
   play(what: Played): void;
   /** Whether something sounds; `stop` ends it. */
   readonly playing: boolean;
@@ -146,6 +153,21 @@ export function splitAt(context: DeskContext, tick: number): void {
   edit(context, splitLabel(context.state.reading, label.id, tick, newId), 'Split the label.', newId);
 }
 
+function copyPattern(context: DeskContext): void {
+  const chosen = findSelection(context.state);
+  const pattern = takePattern(chosen);
+  if (!pattern) return;
+  context.ui.keepPattern(pattern);
+  context.dispatch({ kind: 'say', text: chosen.length === 1 ? 'Copied a label.' : `Copied ${chosen.length} labels as a pattern.` });
+}
+
+function pastePattern(context: DeskContext): void {
+  const { pattern } = context.ui;
+  if (!pattern) return context.dispatch({ kind: 'say', text: 'Nothing was copied yet: select labels and copy them first.' });
+  const at = findSelection(context.state)[0]?.start ?? getSelected(context.state).start;
+  edit(context, layPattern(context.state.reading, pattern, at, () => crypto.randomUUID()), 'Laid the copied pattern here.');
+}
+
 function blank(context: DeskContext): void {
   const label = getSelected(context.state);
   edit(context, setNumeral(context.state.reading, label.id, null), 'Took the numeral away.');
@@ -167,16 +189,24 @@ export const COMMANDS: readonly Command[] = [
   { id: 'accept', words: 'Accept, and on to the next', keys: ['Enter'], group: 'Labels', needs: 'write', run: accept },
   { id: 'accept-bar', words: 'Accept the bar', keys: ['Shift+Enter'], group: 'Labels', needs: 'proposals', run: acceptBar },
   { id: 'accept-so-far', words: 'Accept everything up to here', keys: ['Ctrl+Enter'], group: 'Labels', needs: 'proposals', run: (c) => acceptSpan(c, c.state.reading.start, getSelected(c.state).end) },
+  { id: 'accept-from', words: 'Accept all from a certainty on', keys: ['z'], group: 'Labels', needs: 'proposals', run: (c) => c.ui.acceptFrom() },
   { id: 'write', words: 'Write the numeral', keys: ['F2'], group: 'Labels', needs: 'write', run: (c) => c.ui.write(null) },
   { id: 'blank', words: 'Take the numeral away', keys: ['Delete', 'Backspace'], group: 'Labels', needs: 'write', run: blank },
+
+  { id: 'tones', words: 'Name the notes left over', keys: ['T'], group: 'Labels', needs: 'proposals', run: (c) => c.ui.nameTones() },
 
   { id: 'split', words: 'Split at a note', keys: ['s'], group: 'Spans', needs: 'spans', run: (c) => c.ui.split() },
   { id: 'join', words: 'Join with the next', keys: ['j'], group: 'Spans', needs: 'spans', run: (c) => edit(c, mergeWithNext(c.state.reading, c.state.selectedId), 'Joined two labels.') },
   { id: 'start-earlier', words: 'Begin a note earlier', keys: ['['], group: 'Spans', needs: 'spans', run: (c) => moveStart(c, -1) },
   { id: 'start-later', words: 'Begin a note later', keys: [']'], group: 'Spans', needs: 'spans', run: (c) => moveStart(c, 1) },
 
+  { id: 'copy', words: 'Copy the selected labels', keys: ['Ctrl+C'], group: 'Spans', run: copyPattern },
+  { id: 'paste', words: 'Lay the copy here, in this key', keys: ['Ctrl+V'], group: 'Spans', needs: 'spans', run: pastePattern },
+
   { id: 'key', words: 'Change the key from here', keys: ['k'], group: 'Keys', needs: 'keys', run: (c) => c.ui.chooseKey() },
   { id: 'exchange', words: 'Tonicise or modulate', keys: ['t'], group: 'Keys', needs: 'keys', run: (c) => edit(c, exchangeFrame(c.state.reading, findSelection(c.state)), 'Read in the other frame.') },
+
+  { id: 'pivot', words: 'Pivot: read in the next key too', keys: ['q'], group: 'Keys', needs: 'keys', run: (c) => edit(c, togglePivot(c.state.reading, c.state.selectedId), getSelected(c.state).pivot ? 'No pivot any more.' : 'A pivot, read in both keys.') },
 
   { id: 'next-difference', words: 'Next difference', keys: ['x'], group: 'Side by side', needs: 'beside', run: (c) => c.beside?.step(1) },
   { id: 'previous-difference', words: 'Difference before', keys: ['X'], group: 'Side by side', needs: 'beside', run: (c) => c.beside?.step(-1) },

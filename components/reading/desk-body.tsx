@@ -17,6 +17,7 @@ import { Toolbar } from './toolbar';
 import { useDesk, useDeskState } from './use-desk';
 import { useRemarks } from './use-remarks';
 import { useSaving } from './use-saving';
+import { findToneMarks } from './tone-marks';
 import { useSpelling } from './use-spelling';
 import { useWhy } from './use-why';
 
@@ -39,6 +40,7 @@ export function DeskBody(props: DeskBodyProps) {
   const remarks = useRemarks(base);
   const label = getSelected(state);
   const why = useWhy(context.powers.proposals ? score : null, state.reading, label.id);
+  const toneMarks = useMemo(() => findToneMarks(state.reading, label.id, desk.arrows ? why : null), [state.reading, label.id, desk.arrows, why]);
   const settled = useMemo(() => state.reading.labels.filter((l) => !isGiven(l) && isSettled(l)).length, [state.reading.labels, isGiven]);
 
   useEffect(() => onProgress?.(settled, state.reading.labels.length), [onProgress, settled, state.reading.labels.length]);
@@ -49,9 +51,9 @@ export function DeskBody(props: DeskBodyProps) {
 
   return (
     <div className="flex h-full min-h-0 flex-col overflow-hidden">
-      <Toolbar context={context} spelling={spelling} saving={context.powers.write && base ? saving : null} heading={props.heading} actions={props.actions} zoom={desk.zoom} arrows={desk.arrows} onMargin={() => desk.setMarginOpen(!desk.marginOpen)} />
+      <Toolbar context={context} keys={desk.keys} spelling={spelling} saving={context.powers.write && base ? saving : null} heading={props.heading} actions={props.actions} zoom={desk.zoom} arrows={desk.arrows} onMargin={() => desk.setMarginOpen(!desk.marginOpen)} />
       <div className="relative flex min-h-0 flex-1">
-        <ScoreRegion {...props} sheet={sheet} desk={desk} tendencies={desk.arrows && why ? why.tendencyTones : []} />
+        <ScoreRegion {...props} sheet={sheet} desk={desk} tendencies={desk.arrows && why ? why.tendencyTones : []} toneMarks={toneMarks} />
         <aside
           aria-label="Margin"
           className={

@@ -4,6 +4,8 @@ import { namePlace } from '@/components/score/beats';
 import { layOver } from '@/lib/harmony/edit-merge';
 import type { Score } from '@/lib/score/score';
 import type { ConventionSheet } from '@/lib/theory/conventions';
+import { AcceptDialog } from './accept-dialog';
+import { acceptCertain } from './commands';
 import { ConflictDialog } from './conflict-dialog';
 import { getSelected } from './desk-state';
 import { HelpSheet } from './help-sheet';
@@ -19,7 +21,7 @@ export function DeskDialogs({ desk, score, sheet }: { readonly desk: Desk; reado
   const close = () => open({ kind: 'none' });
   return (
     <>
-      <HelpSheet open={opened.kind === 'help'} onOpenChange={(is) => !is && close()} powers={context.powers} />
+      <HelpSheet open={opened.kind === 'help'} onOpenChange={(is) => !is && close()} powers={context.powers} keys={desk.keys} onSet={desk.setKeys} />
       {opened.kind === 'key' ? (
         <KeyDialog
           reading={state.reading}
@@ -30,6 +32,7 @@ export function DeskDialogs({ desk, score, sheet }: { readonly desk: Desk; reado
           onClose={close}
         />
       ) : null}
+      {opened.kind === 'accept-from' ? <AcceptDialog reading={state.reading} onAccept={(atLeast) => acceptCertain(context, atLeast)} onClose={close} /> : null}
       {conflict ? (
         <ConflictDialog
           conflict={conflict}

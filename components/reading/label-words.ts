@@ -1,6 +1,7 @@
 import { isSettled, lookOf } from '@/components/score/label-look';
 import { namePlace } from '@/components/score/beats';
-import type { Label } from '@/lib/harmony/reading';
+import { findPivot } from '@/lib/harmony/edit-keys';
+import type { Label, NonChordKind, Reading } from '@/lib/harmony/reading';
 import type { Score } from '@/lib/score/score';
 import type { ConventionSheet } from '@/lib/theory/conventions';
 import { type Key, formatKeyForPeople } from '@/lib/theory/key';
@@ -20,6 +21,12 @@ export function describeLabel(score: Score, label: Label, sheet: ConventionSheet
   const state = given ? 'given' : label.numeral ? lookOf(label).word : 'to be written';
   const certainty = !isSettled(label) && label.certainty !== null ? `, ${speakCertainty(label.certainty)}` : '';
   return `${capital(namePlace(score, label.start))}: ${numeral}, ${state}${certainty}`;
+}
+
+/** `, pivot: two in G major`; nothing for a label that is none. */
+export function sayPivot(reading: Reading, label: Label, sheet: ConventionSheet): string {
+  const pivot = findPivot(reading, label);
+  return pivot ? `, pivot: ${typesetNumeral(pivot.numeral, pivot.key.mode, sheet).spoken} in ${formatKeyForPeople(pivot.key)}` : '';
 }
 
 /** Certainty in words and in figures: a number alone says too much. */
@@ -43,3 +50,16 @@ export function spellForPeople(key: Key, numeral: Numeral): string[] {
 function capital(text: string): string {
   return text.charAt(0).toUpperCase() + text.slice(1);
 }
+
+export const TONE_WORDS = {
+  passing: 'passing tone',
+  neighbour: 'neighbour tone',
+  'double-neighbour': 'double neighbour',
+  appoggiatura: 'appoggiatura',
+  escape: 'escape tone',
+  anticipation: 'anticipation',
+  suspension: 'suspension',
+  retardation: 'retardation',
+  pedal: 'pedal tone',
+  other: 'left over, of no known kind',
+} as const satisfies Record<NonChordKind, string>;

@@ -1,12 +1,14 @@
 import type { Dispatch } from 'react';
 import { findBar, namePlace } from '@/components/score/beats';
-import type { Label, Why } from '@/lib/harmony/reading';
+import { markTone } from '@/lib/harmony/edit';
+import type { Label, NonChordKind, Why } from '@/lib/harmony/reading';
 import type { Score } from '@/lib/score/score';
 import type { ConventionSheet } from '@/lib/theory/conventions';
 import { chooseOther } from './commands';
 import type { DeskAction, DeskState } from './desk-state';
 import { DifferencesPanel } from './differences-panel';
 import { HistoryPanel } from './history-panel';
+import { TONE_WORDS } from './label-words';
 import type { MarginPage } from './margin';
 import { OthersPanel } from './others-panel';
 import { RemarksPanel } from './remarks-panel';
@@ -47,8 +49,13 @@ function differencesPage({ desk, score, sheet }: Shown): MarginPage {
   };
 }
 
-function whyPage({ score, label, why }: Shown): MarginPage {
-  return { value: 'why', label: 'Why', content: <WhyPanel score={score} label={label} why={why} /> };
+function whyPage({ desk, score, state, dispatch, label, why }: Shown): MarginPage {
+  const mark = (noteId: number, kind: NonChordKind | null) => {
+    const words = kind ? `Named a note: ${TONE_WORDS[kind]}.` : 'Took back what a note was named.';
+    dispatch({ kind: 'edit', editId: crypto.randomUUID(), result: markTone(state.reading, label.id, noteId, kind), words });
+  };
+  const onMark = desk.context.canWrite(label) ? mark : undefined;
+  return { value: 'why', label: 'Why', content: <WhyPanel score={score} label={label} why={why} onMark={onMark} /> };
 }
 
 function othersPage({ desk, score, sheet, label }: Shown): MarginPage {

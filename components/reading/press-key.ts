@@ -1,5 +1,5 @@
 import type { KeyboardEvent } from 'react';
-import { COMMANDS, chooseOther, runCommand } from './commands';
+import { chooseOther, runCommand } from './commands';
 import { getSelected } from './desk-state';
 import { beginsNumeral, nameKey } from './keymap';
 import type { Desk } from './use-desk';
@@ -10,7 +10,7 @@ export function pressKey(event: KeyboardEvent, desk: Desk): void {
   if (event.defaultPrevented || (event.target as HTMLElement).closest('button, input, textarea, summary')) return;
   const key = nameKey(event);
   const label = getSelected(context.state);
-  const command = COMMANDS.find((c) => c.keys.includes(key));
+  const command = desk.keys.find(key);
   if (command) {
     event.preventDefault();
     return runCommand(context, command.id);

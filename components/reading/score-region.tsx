@@ -1,7 +1,6 @@
 'use client';
 
 import { useCallback, useEffect, useLayoutEffect, useMemo, useRef, useState } from 'react';
-import { BesideLane } from '@/components/score/beside-lane';
 import { BoundaryGrip } from '@/components/score/boundary-grip';
 import type { SheetGeometry } from '@/components/score/geometry';
 import { Lanes } from '@/components/score/lanes';
@@ -10,19 +9,20 @@ import { PointerSurface } from '@/components/score/pointer-surface';
 import { ResolutionArrows } from '@/components/score/resolution-arrows';
 import { LANE_ROOM, ScoreView } from '@/components/score/score-view';
 import { SpanWash } from '@/components/score/span-wash';
+import { type ToneMark, ToneMarks } from '@/components/score/tone-marks';
 import { moveBoundary } from '@/lib/harmony/edit-spans';
 import type { Label, TendencyTone } from '@/lib/harmony/reading';
 import type { Score } from '@/lib/score/score';
 import type { ConventionSheet } from '@/lib/theory/conventions';
 import { splitAt } from './commands';
+import { ComparedLane } from './compared-lane';
 import { findSelection, getSelected } from './desk-state';
 import type { DeskProps } from './desk-types';
 import { pressKey } from './press-key';
-import { describeLabel } from './label-words';
+import { describeLabel, sayPivot } from './label-words';
 import { NumeralEntry } from './numeral-entry';
 import { ScoreTable } from './score-table';
 import { SplitPicker } from './split-picker';
-import type { Beside } from './use-beside';
 import type { Desk } from './use-desk';
 import { findNumeralBefore, writeAt } from './written';
 
@@ -32,6 +32,7 @@ interface ScoreRegionProps extends Pick<DeskProps, 'firstBar' | 'lastBar' | 'fee
   readonly sheet: ConventionSheet;
   readonly desk: Desk;
   readonly tendencies: readonly TendencyTone[];
+  readonly toneMarks: readonly ToneMark[];
 }
 
 /** The score with its lanes; the one place where the desk's keys act. */
@@ -83,7 +84,7 @@ function useFocusFollows(region: { readonly current: HTMLElement | null }, label
     if (closed || active === document.body || region.current?.contains(active)) find()?.focus();
     else find()?.scrollIntoView({ block: 'nearest', inline: 'nearest' });
     // A dialog lets go of the keyboard only after it has closed.
-    if (was.opened === 'key' || was.opened === 'help') setTimeout(() => find()?.focus(), 0);
+    if (was.opened === 'key' || was.opened === 'help' || was.opened === 'accept-from') setTimeout(() => find()?.focus(), 0);
   });
 }
 
@@ -101,7 +102,7 @@ function Overlay(props: ScoreRegionProps & { readonly geometry: SheetGeometry })
   const selectedIds = useMemo(() => new Set(findSelection(state).map((l) => l.id)), [state]);
   const givenIds = useMemo(() => new Set(state.reading.labels.filter(isGiven).map((l) => l.id)), [state.reading.labels, isGiven]);
   const marks = useMemo(() => (feedback ? new Map(Object.entries(feedback)) : undefined), [feedback]);
-  const describe = useCallback((l: Label) => describeLabel(score, l, sheet, isGiven(l)), [score, sheet, isGiven]);
+  const describe = useCallback((l: Label) => describeLabel(score, l, sheet, isGiven(l)) + sayPivot(state.reading, l, sheet), [score, sheet, isGiven, state.reading]);
   const onSelect = useCallback((labelId: string, extend: boolean) => dispatch({ kind: 'select', labelId, extend }), [dispatch]);
   const onOpen = useCallback(() => powers.write && open({ kind: 'write', typed: null }), [powers.write, open]);
   useEffect(() => noteGeometry(geometry), [noteGeometry, geometry]);
@@ -116,6 +117,7 @@ function Overlay(props: ScoreRegionProps & { readonly geometry: SheetGeometry })
         onDrag={(tick) => onSelect(labelAt(tick)?.id ?? '', true)}
       />
       <PlayCursor geometry={geometry} place={desk.sound.place} />
+      <ToneMarks geometry={geometry} score={score} marks={props.toneMarks} />
       <ResolutionArrows geometry={geometry} score={score} tones={tendencies} />
       <Lanes
         geometry={geometry}
@@ -135,7 +137,7 @@ function Overlay(props: ScoreRegionProps & { readonly geometry: SheetGeometry })
         } : undefined}
         entry={<Entry score={score} sheet={sheet} desk={desk} />}
       />
-      {desk.beside ? <Compared geometry={geometry} beside={desk.beside} sheet={sheet} onSelect={(l) => onSelect(labelAt(l.start)?.id ?? '', false)} /> : null}
+      {desk.beside ? <ComparedLane geometry={geometry} beside={desk.beside} sheet={sheet} onSelect={(l) => onSelect(labelAt(l.start)?.id ?? '', false)} /> : null}
       {powers.spans ? (
         <BoundaryGrip
           geometry={geometry}
@@ -146,12 +148,6 @@ function Overlay(props: ScoreRegionProps & { readonly geometry: SheetGeometry })
       ) : null}
     </>
   );
-}
-
-/** The reading beside this one, under its lanes. */
-function Compared({ geometry, beside, sheet, onSelect }: { readonly geometry: SheetGeometry; readonly beside: Beside; readonly sheet: ConventionSheet; onSelect(label: Label): void }) {
-  const differing = useMemo(() => new Set(beside.differences.map((d) => d.theirs.id)), [beside.differences]);
-  return <BesideLane geometry={geometry} below={LANE_ROOM} reading={beside.reading} sheet={sheet} name={beside.by} differing={differing} currentId={beside.current?.theirs.id ?? null} onSelect={onSelect} />;
 }
 
 /** The line that is typed into, or the choice of where to split. */

@@ -2,12 +2,15 @@
 
 import type { ReactNode } from 'react';
 import { Button, Mark, Menu, MenuAction, MenuChoice, MenuHeading, MenuRule, Spinner, classNames } from '@/components/ui';
-import { type DeskContext, acceptCertain, getCommand, isOffered, runCommand } from './commands';
+import { type DeskContext, getCommand, isOffered, runCommand } from './commands';
+import type { KeyBindings } from './key-bindings';
+import { showKey } from './keymap';
 import type { Saving } from './use-saving';
 import type { SpellingChoice } from './use-spelling';
 
 interface ToolbarProps {
   readonly context: DeskContext;
+  readonly keys: KeyBindings;
   readonly spelling: SpellingChoice;
   readonly saving: Saving | null;
   readonly heading: ReactNode;
@@ -19,7 +22,7 @@ interface ToolbarProps {
 }
 
 /** The commands for mouse and touch; the same as the keys'. */
-export function Toolbar({ context, spelling, saving, heading, actions, zoom, arrows, onMargin }: ToolbarProps) {
+export function Toolbar({ context, keys, spelling, saving, heading, actions, zoom, arrows, onMargin }: ToolbarProps) {
   const { powers, state } = context;
   return (
     <div role="toolbar" aria-label="Desk" className="flex flex-wrap items-center gap-x-3 gap-y-1 border-b border-rule-strong bg-paper px-3 py-1.5">
@@ -27,24 +30,24 @@ export function Toolbar({ context, spelling, saving, heading, actions, zoom, arr
       {saving ? <SaveMark saving={saving} onChoose={() => context.dispatch({ kind: 'choose-now' })} /> : null}
       {powers.write ? (
         <span className="flex items-center">
-          <Tool context={context} id="undo" disabled={state.undo.length === 0}>Undo</Tool>
-          <Tool context={context} id="redo" disabled={state.redo.length === 0}>Redo</Tool>
+          <Tool context={context} keys={keys} id="undo" disabled={state.undo.length === 0}>Undo</Tool>
+          <Tool context={context} keys={keys} id="redo" disabled={state.redo.length === 0}>Redo</Tool>
         </span>
       ) : null}
       {powers.write ? (
         <span className="flex items-center gap-1">
-          {powers.proposals ? <Tool context={context} id="accept" kind="plain">Accept</Tool> : null}
-          <Tool context={context} id="write" kind="plain">Write</Tool>
+          {powers.proposals ? <Tool context={context} keys={keys} id="accept" kind="plain">Accept</Tool> : null}
+          <Tool context={context} keys={keys} id="write" kind="plain">Write</Tool>
         </span>
       ) : null}
       {powers.write || spelling.spellings.length > 0 ? <MoreMenu context={context} spelling={spelling} /> : null}
       <span className="flex items-center">
-        <Tool context={context} id="play" label={context.ui.playing ? 'Stop' : 'Play from here'}>{context.ui.playing ? 'Stop' : 'Play'}</Tool>
-        {powers.proposals ? <Tool context={context} id="arrows" pressed={arrows}>Resolutions</Tool> : null}
-        <Tool context={context} id="smaller" label="Smaller">−</Tool>
+        <Tool context={context} keys={keys} id="play" label={context.ui.playing ? 'Stop' : 'Play from here'}>{context.ui.playing ? 'Stop' : 'Play'}</Tool>
+        {powers.proposals ? <Tool context={context} keys={keys} id="arrows" pressed={arrows}>Resolutions</Tool> : null}
+        <Tool context={context} keys={keys} id="smaller" label="Smaller">−</Tool>
         <span className="tabular hidden w-11 text-center text-small sm:inline" aria-live="polite">{Math.round(zoom * 100)} %</span>
-        <Tool context={context} id="larger" label="Larger">+</Tool>
-        <Tool context={context} id="help" label="All keys">?</Tool>
+        <Tool context={context} keys={keys} id="larger" label="Larger">+</Tool>
+        <Tool context={context} keys={keys} id="help" label="All keys">?</Tool>
       </span>
       <Button size="small" kind="plain" className="lg:hidden" onClick={onMargin}>Margin</Button>
       {actions}
@@ -54,6 +57,7 @@ export function Toolbar({ context, spelling, saving, heading, actions, zoom, arr
 
 interface ToolProps {
   readonly context: DeskContext;
+  readonly keys: KeyBindings;
   readonly id: string;
   readonly label?: string;
   readonly kind?: 'plain' | 'quiet';
@@ -62,7 +66,7 @@ interface ToolProps {
   readonly children: ReactNode;
 }
 
-function Tool({ context, id, label, kind = 'quiet', disabled = false, pressed, children }: ToolProps) {
+function Tool({ context, keys, id, label, kind = 'quiet', disabled = false, pressed, children }: ToolProps) {
   const command = getCommand(id);
   if (!isOffered(command, context.powers)) return null;
   return (
@@ -70,7 +74,7 @@ function Tool({ context, id, label, kind = 'quiet', disabled = false, pressed, c
       size="small"
       kind={kind}
       disabled={disabled}
-      title={`${command.words} (${command.keys[0]})`}
+      title={[command.words, ...keys.keysOf(command).slice(0, 1).map((key) => `(${showKey(key)})`)].join(' ')}
       aria-label={label}
       aria-pressed={pressed}
       className={classNames('min-w-8', pressed && 'bg-selection')}
@@ -82,9 +86,9 @@ function Tool({ context, id, label, kind = 'quiet', disabled = false, pressed, c
 }
 
 const MORE = [
-  { title: 'Accept', ids: ['accept-bar', 'accept-so-far'] },
-  { title: 'Label', ids: ['blank', 'split', 'join', 'start-earlier', 'start-later'] },
-  { title: 'Key', ids: ['key', 'exchange'] },
+  { title: 'Accept', ids: ['accept-bar', 'accept-so-far', 'accept-from'] },
+  { title: 'Label', ids: ['blank', 'split', 'join', 'start-earlier', 'start-later', 'copy', 'paste', 'tones'] },
+  { title: 'Key', ids: ['key', 'exchange', 'pivot'] },
 ] as const;
 
 function MoreMenu({ context, spelling }: { readonly context: DeskContext; readonly spelling: SpellingChoice }) {
@@ -97,7 +101,6 @@ function MoreMenu({ context, spelling }: { readonly context: DeskContext; readon
           <div key={title}>
             <MenuHeading>{title}</MenuHeading>
             {offered.map((command) => <MenuAction key={command.id} onSelect={() => runCommand(context, command.id)}>{command.words}</MenuAction>)}
-            {title === 'Accept' ? <CertainActions context={context} /> : null}
             <MenuRule />
           </div>
         );
@@ -111,15 +114,6 @@ function MoreMenu({ context, spelling }: { readonly context: DeskContext; readon
         </>
       ) : null}
     </Menu>
-  );
-}
-
-function CertainActions({ context }: { readonly context: DeskContext }) {
-  return (
-    <>
-      <MenuAction onSelect={() => acceptCertain(context, 0.9)}>Accept all that are nearly certain (90 %)</MenuAction>
-      <MenuAction onSelect={() => acceptCertain(context, 0.7)}>Accept all that are likely (70 %)</MenuAction>
-    </>
   );
 }
 

@@ -4,16 +4,18 @@ import { type Dispatch, useCallback, useMemo, useReducer, useRef, useState } fro
 import type { SheetGeometry } from '@/components/score/geometry';
 import { placeTick } from '@/components/score/geometry';
 import { onsetsOf } from '@/components/score/beats';
+import type { LabelPattern } from '@/lib/harmony/edit-pattern';
 import type { Label } from '@/lib/harmony/reading';
 import type { Score } from '@/lib/score/score';
 import type { DeskContext } from './commands';
 import { type DeskAction, type DeskState, openDesk, reduceDesk } from './desk-state';
 import { type DeskProps, type Powers, isGiven, powersOf } from './desk-types';
+import { type KeyBindings, bindKeys, keepOwnKeys, readOwnKeys } from './key-bindings';
 import { type Beside, useBeside } from './use-beside';
 import { type Sound, useSound } from './use-sound';
 
 /** What is open beside or over the score. */
-export type Opened = { readonly kind: 'none' } | { readonly kind: 'write'; readonly typed: string | null } | { readonly kind: 'split' | 'key' | 'help' };
+export type Opened = { readonly kind: 'none' } | { readonly kind: 'write'; readonly typed: string | null } | { readonly kind: 'split' | 'key' | 'help' | 'accept-from' };
 
 export interface Desk {
   readonly context: DeskContext;
@@ -22,6 +24,9 @@ export interface Desk {
   readonly zoom: number;
   readonly arrows: boolean;
   readonly sound: Sound;
+  readonly keys: KeyBindings;
+  /** Sets the keys of a command; null gives it its own again. */
+  setKeys(commandId: string, keys: readonly string[] | null): void;
   readonly beside: Beside | null;
   readonly page: string;
   setPage(page: string): void;
@@ -44,6 +49,15 @@ export function useDesk(props: DeskProps, score: Score, startZoom: number, state
   const [page, setPage] = useState(firstPage(props));
   const [remarkTurn, setRemarkTurn] = useState(0);
   const [marginOpen, setMarginOpen] = useState(props.openPage !== undefined);
+  const [ownKeys, setOwnKeys] = useState(() => readOwnKeys(localStorage, props.userId));
+  const keys = useMemo(() => bindKeys(ownKeys), [ownKeys]);
+  const setKeys = (commandId: string, set: readonly string[] | null) => {
+    const { [commandId]: _, ...others } = ownKeys;
+    const next = set ? { ...others, [commandId]: set } : others;
+    setOwnKeys(next);
+    keepOwnKeys(localStorage, props.userId, next);
+  };
+  const [pattern, keepPattern] = useState<LabelPattern | null>(null);
   const sound = useSound(score, state, dispatch);
   const geometries = useRef(new Map<number, SheetGeometry>());
   const powers = useMemo(() => powersOf(mode, rules, props.beside !== undefined), [mode, rules, props.beside]);
@@ -77,12 +91,25 @@ export function useDesk(props: DeskProps, score: Score, startZoom: number, state
       zoom: (step) => setZoom((now) => stepZoom(now, step)),
       nextTab: () => setPage((now) => nextPage(now, powers, props.base !== null)),
       toggleArrows: () => setArrows((on) => !on),
+      acceptFrom: () => open({ kind: 'accept-from' }),
+      nameTones: () => {
+        setPage('why');
+        setMarginOpen(true);
+        focusTones();
+      },
+      pattern,
+      keepPattern,
       play: sound.play,
       playing: sound.playing,
       stop: sound.stop,
     },
   };
-  return { context, opened, open, zoom, arrows, sound, beside, page, setPage, remarkTurn, marginOpen, setMarginOpen, isGiven: given, noteGeometry };
+  return { context, opened, open, zoom, arrows, sound, keys, setKeys, beside, page, setPage, remarkTurn, marginOpen, setMarginOpen, isGiven: given, noteGeometry };
+}
+
+/** The first of the notes left over, once the margin shows them. */
+function focusTones(): void {
+  setTimeout(() => document.querySelector<HTMLElement>('[data-left-over] select')?.focus(), 0);
 }
 
 export function useDeskState(props: DeskProps): [DeskState, Dispatch<DeskAction>] {

@@ -1,21 +1,24 @@
 'use client';
 
-import { Mark, type Shape, type Tone } from '@/components/ui';
+import { Mark, type Shape, type Tone, classNames } from '@/components/ui';
 import { ChordStaff } from '@/components/score/chord-staff';
 import { namePlace } from '@/components/score/beats';
-import type { Label, Resolution, TendencyTone, Term, Why } from '@/lib/harmony/reading';
+import { type Label, NON_CHORD_KINDS, type NonChordKind, type Resolution, type TendencyTone, type Term, type Why } from '@/lib/harmony/reading';
 import type { Score } from '@/lib/score/score';
 import { formatPitchClassForPeople } from '@/lib/theory/pitch';
 import { spellNumeral } from '@/lib/theory/spell';
+import { TONE_WORDS } from './label-words';
 
 interface WhyPanelProps {
   readonly score: Score;
   readonly label: Label;
   readonly why: Why | null;
+  /** Says what kind a note left over is; null takes it back. Absent where nothing may be written. */
+  readonly onMark?: ((noteId: number, kind: NonChordKind | null) => void) | undefined;
 }
 
 /** The evidence for a label: what it spells, what it leaves over, where its tendency tones go, what speaks for and against. */
-export function WhyPanel({ score, label, why }: WhyPanelProps) {
+export function WhyPanel({ score, label, why, onMark }: WhyPanelProps) {
   if (!label.numeral) return <p className="text-ink-soft">A blank. Write a numeral to see what it spells and what it explains.</p>;
   const missing = new Set(why?.missing ?? []);
   const tones = spellNumeral(label.key, label.numeral).tones.map((tone) => ({ ...tone, missing: missing.has(tone.role) }));
@@ -25,7 +28,7 @@ export function WhyPanel({ score, label, why }: WhyPanelProps) {
       {why ? (
         <>
           <Sentences sentences={why.sentences} />
-          <LeftOver score={score} why={why} />
+          <LeftOver score={score} label={label} why={why} onMark={onMark} />
           <Tendencies score={score} tones={why.tendencyTones} />
           <Terms termsFor={why.termsFor} termsAgainst={why.termsAgainst} />
         </>
@@ -52,31 +55,42 @@ function Sentences({ sentences }: { readonly sentences: readonly string[] }) {
   );
 }
 
-const KIND_WORDS = {
-  passing: 'passing tone',
-  neighbour: 'neighbour tone',
-  'double-neighbour': 'double neighbour',
-  appoggiatura: 'appoggiatura',
-  escape: 'escape tone',
-  anticipation: 'anticipation',
-  suspension: 'suspension',
-  retardation: 'retardation',
-  pedal: 'pedal tone',
-  other: 'left over, of no known kind',
-} as const satisfies Record<Why['nonChordTones'][number]['kind'], string>;
+interface LeftOverProps {
+  readonly score: Score;
+  readonly label: Label;
+  readonly why: Why;
+  readonly onMark: WhyPanelProps['onMark'];
+}
 
-function LeftOver({ score, why }: { readonly score: Score; readonly why: Why }) {
+function LeftOver({ score, label, why, onMark }: LeftOverProps) {
   if (why.nonChordTones.length === 0) return null;
   return (
     <Part title="Left over">
-      <ul className="flex flex-col gap-0.5">
-        {why.nonChordTones.map((tone) => (
-          <li key={tone.noteId} className="flex flex-wrap items-baseline gap-x-2">
-            <span className="font-book text-lead leading-none">{formatPitchClassForPeople(tone.pitch.fifths)}</span>
-            <span className={tone.kind === 'other' ? 'text-madder' : undefined}>{KIND_WORDS[tone.kind]}</span>
-            <span className="text-small text-ink-soft">{placeOfNote(score, tone.noteId)}</span>
-          </li>
-        ))}
+      <ul className="flex flex-col gap-0.5" data-left-over>
+        {why.nonChordTones.map((tone) => {
+          const byHand = label.tones?.some(({ noteId }) => noteId === tone.noteId) ?? false;
+          const place = placeOfNote(score, tone.noteId);
+          const name = formatPitchClassForPeople(tone.pitch.fifths);
+          return (
+            <li key={tone.noteId} className="flex flex-wrap items-baseline gap-x-2">
+              <span className="font-book text-lead leading-none">{name}</span>
+              {onMark ? (
+                <select
+                  aria-label={`${name}, ${place}: kind`}
+                  className={classNames('min-h-6 max-w-44 border-b border-rule bg-transparent text-base', tone.kind === 'other' && 'text-madder')}
+                  value={tone.kind}
+                  onChange={(event) => onMark(tone.noteId, event.target.value === '' ? null : (event.target.value as NonChordKind))}
+                >
+                  {NON_CHORD_KINDS.map((kind) => <option key={kind} value={kind}>{TONE_WORDS[kind]}</option>)}
+                  {byHand ? <option value="">as first proposed</option> : null}
+                </select>
+              ) : (
+                <span className={tone.kind === 'other' ? 'text-madder' : undefined}>{TONE_WORDS[tone.kind]}</span>
+              )}
+              <span className="text-small text-ink-soft">{place}{byHand ? ', named by hand' : ''}</span>
+            </li>
+          );
+        })}
       </ul>
     </Part>
   );

@@ -9,6 +9,8 @@ export interface LaneItem {
   readonly x: number;
   /** Width at full size. */
   readonly width: number;
+  /** Width of what stands under it in the second row, at full size; 0 or absent for nothing. */
+  readonly below?: number;
 }
 
 export interface PlacedItem extends LaneItem {
@@ -28,10 +30,12 @@ export const ITEM_GAP = 5;
 export function layLane(items: readonly LaneItem[], right: number): PlacedItem[] {
   const edges: [number, number] = [-Infinity, -Infinity];
   const placed = items.map((item, index) => {
-    const row = chooseRow(item, edges);
-    const left = Math.max(item.x, edges[row]);
+    const below = item.below ?? 0;
+    const row = below > 0 ? 0 : chooseRow(item, edges);
+    const left = Math.max(item.x, edges[row], below > 0 ? edges[1] : -Infinity);
     const scale = shrinkTo(item, roomFor(items, index, left, right));
     edges[row] = left + item.width * scale + ITEM_GAP;
+    if (below > 0) edges[1] = left + below + ITEM_GAP;
     return { ...item, row, scale, left };
   });
   return pullBack(placed, right);

@@ -27,13 +27,13 @@ export interface LaneModel {
   readonly continuations: readonly Continuation[];
 }
 
-/** Lays a sheet's labels. `widthOf` is a label's natural width in engraving pixels. */
-export function layLabels(geometry: SheetGeometry, labels: readonly Label[], widthOf: (label: Label) => number): LaneModel {
+/** Lays a sheet's labels. `widthOf` is a label's natural width in engraving pixels, `belowOf` that of a pivot's second numeral. */
+export function layLabels(geometry: SheetGeometry, labels: readonly Label[], widthOf: (label: Label) => number, belowOf: (label: Label) => number = () => 0): LaneModel {
   const pieces = labels.flatMap((label) => cutSpan(geometry, label.start, label.end).map((piece) => ({ label, piece })));
   const begun = pieces.filter(({ piece }) => piece.begins);
   const placed = geometry.systems.flatMap((system) => {
     const here = begun.filter(({ piece }) => piece.system === system.index);
-    const items = here.map(({ label, piece }) => ({ id: label.id, x: piece.x, width: widthOf(label) }));
+    const items = here.map(({ label, piece }) => ({ id: label.id, x: piece.x, width: widthOf(label), below: belowOf(label) }));
     const laid = layLane(items, system.right + 24);
     return here.map(({ label, piece }, i) => ({
       label,

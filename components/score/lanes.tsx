@@ -3,13 +3,16 @@
 import { type ReactNode, memo, useMemo } from 'react';
 import { type Shape, ShapeIcon, TONE_TEXT, type Tone, classNames } from '@/components/ui';
 import type { Label, Reading } from '@/lib/harmony/reading';
+import { findPivot } from '@/lib/harmony/edit-keys';
 import type { ConventionSheet } from '@/lib/theory/conventions';
-import type { NumeralParts } from '@/lib/theory/typeset';
+import { type NumeralParts, typesetNumeral } from '@/lib/theory/typeset';
+import { formatKeyForPeople } from '@/lib/theory/key';
 import type { SheetGeometry } from './geometry';
 import { KeyLine } from './key-line';
 import { LabelFace, NUMERAL_SIZE, faceOf, faceWidth } from './label-face';
 import { lookOf } from './label-look';
 import { NUMERAL_LINE, type PlacedLabel, layLabels } from './lane-model';
+import { type PivotFace, PivotMark } from './pivot-mark';
 import { LaneRules } from './lane-rules';
 
 /** Shown at a label in place of its state: a verdict, say. */
@@ -46,7 +49,11 @@ export function Lanes(props: LanesProps) {
   const end = geometry.bars.at(-1)?.end ?? 0;
   const labels = useMemo(() => reading.labels.filter((l) => l.start < end && l.end > start), [reading.labels, start, end]);
   const faces = useMemo(() => facesOf(labels, sheet), [labels, sheet]);
-  const model = useMemo(() => layLabels(geometry, labels, (label) => faceWidth(faces.get(label.id) ?? null)), [geometry, labels, faces]);
+  const pivots = useMemo(() => pivotsOf(reading, labels, sheet), [reading, labels, sheet]);
+  const model = useMemo(
+    () => layLabels(geometry, labels, (label) => faceWidth(faces.get(label.id) ?? null), (label) => belowWidth(pivots.get(label.id))),
+    [geometry, labels, faces, pivots],
+  );
   const { describe, onSelect, onOpen } = props;
   const words = useMemo(() => new Map(labels.map((label) => [label.id, describe(label)])), [labels, describe]);
 
@@ -61,6 +68,7 @@ export function Lanes(props: LanesProps) {
           label={placed.label}
           {...position(geometry, placed)}
           face={faces.get(placed.label.id) ?? null}
+          pivot={pivots.get(placed.label.id) ?? null}
           words={words.get(placed.label.id) ?? ''}
           current={placed.label.id === props.currentId}
           selected={props.selectedIds.has(placed.label.id)}
@@ -77,6 +85,20 @@ export function Lanes(props: LanesProps) {
 
 function facesOf(labels: readonly Label[], sheet: ConventionSheet): ReadonlyMap<string, NumeralParts | null> {
   return new Map(labels.map((label, i) => [label.id, faceOf(label, labels[i - 1]?.numeral ?? null, sheet)]));
+}
+
+/** Pivots of a sheet: what they are in the key after them, and that key's name. */
+function pivotsOf(reading: Reading, labels: readonly Label[], sheet: ConventionSheet): ReadonlyMap<string, PivotFace> {
+  const found = labels.flatMap((label) => {
+    const pivot = findPivot(reading, label);
+    return pivot ? [[label.id, { key: formatKeyForPeople(pivot.key), parts: typesetNumeral(pivot.numeral, pivot.key.mode, sheet) }] as const] : [];
+  });
+  return new Map(found);
+}
+
+/** Room for the second numeral and the name of its key before it. */
+function belowWidth(pivot: PivotFace | undefined): number {
+  return pivot ? faceWidth(pivot.parts) + pivot.key.length * 7 + 12 : 0;
 }
 
 function position(geometry: SheetGeometry, { placed, system }: PlacedLabel): { left: number; top: number; scale: number } {
@@ -105,6 +127,7 @@ interface LabelViewProps {
   readonly top: number;
   readonly scale: number;
   readonly face: NumeralParts | null;
+  readonly pivot: PivotFace | null;
   readonly words: string;
   readonly current: boolean;
   readonly selected: boolean;
@@ -115,7 +138,7 @@ interface LabelViewProps {
 }
 
 const LabelView = memo(function LabelView(props: LabelViewProps) {
-  const { label, left, top, scale, face, words, current, selected, given, mark, onSelect, onOpen } = props;
+  const { label, left, top, scale, face, pivot, words, current, selected, given, mark, onSelect, onOpen } = props;
   const look = lookOf(label);
   return (
     <div
@@ -138,6 +161,7 @@ const LabelView = memo(function LabelView(props: LabelViewProps) {
         <LabelFace parts={face} />
       </span>
       <StateOf given={given} mark={mark ?? look} />
+      {pivot ? <PivotMark pivot={pivot} /> : null}
     </div>
   );
 });

@@ -3,6 +3,7 @@ import type { Db } from '@/db/client';
 import { keyRegions, labelAlternatives, labels, readings } from '@/db/schema';
 import { DEFAULT_CONVENTIONS } from '@/lib/theory/conventions';
 import { formatNumeral } from '@/lib/theory/numeral-format';
+import type { MarkedTone } from '@/lib/harmony/reading';
 import type { Key } from '@/lib/theory/key';
 import type { Numeral } from '@/lib/theory/numeral';
 import { fifths } from '@/lib/theory/pitch';
@@ -34,6 +35,8 @@ export interface StoredLabel {
   readonly state: LabelState;
   readonly certainty: number | null;
   readonly others: readonly StoredAlternative[];
+  readonly tones?: readonly MarkedTone[] | undefined;
+  readonly pivot?: boolean | undefined;
 }
 
 export interface StoredAlternative {
@@ -57,6 +60,8 @@ export function labelRow(readingId: string, label: StoredLabel, position: number
     keyMode: label.key.mode,
     state: label.state,
     certainty: label.certainty,
+    tones: label.tones ?? null,
+    pivot: label.pivot ?? false,
     ...numeralColumns(label.numeral, label.key.mode),
   };
 }
@@ -142,6 +147,8 @@ function storedLabel(row: typeof labels.$inferSelect, others: readonly Alternati
     numeral: row.numeral,
     state: row.state,
     certainty: row.certainty,
+    ...(row.tones ? { tones: row.tones } : {}),
+    ...(row.pivot ? { pivot: true } : {}),
     others: others.map((other) => ({
       key: keyOf(other.keyTonicFifths, other.keyMode),
       numeral: other.numeral,

@@ -110,7 +110,7 @@ function proposed(column: { readonly name: string }) {
 }
 
 async function updateLabels(db: Db, readingId: string, changed: readonly StoredLabel[]): Promise<void> {
-  const columns = ['startTick', 'endTick', 'keyTonicFifths', 'keyMode', 'numeralText', 'degreeStep', 'degreeAlter', 'quality', 'inversion', 'appliedStep', 'appliedAlter', 'appliedMode', 'special', 'numeral', 'state', 'certainty'] as const;
+  const columns = ['startTick', 'endTick', 'keyTonicFifths', 'keyMode', 'numeralText', 'degreeStep', 'degreeAlter', 'quality', 'inversion', 'appliedStep', 'appliedAlter', 'appliedMode', 'special', 'numeral', 'state', 'certainty', 'tones', 'pivot'] as const;
   const set = Object.fromEntries(columns.map((column) => [column, proposed(labels[column])]));
   for (let at = 0; at < changed.length; at += CHUNK) {
     const rows = changed.slice(at, at + CHUNK).map((label) => labelRow(readingId, label, 0));

@@ -13,6 +13,7 @@ import {
   uniqueIndex,
   varchar,
 } from 'drizzle-orm/mysql-core';
+import type { MarkedTone } from '@/lib/harmony/reading';
 import type { Numeral } from '@/lib/theory/numeral';
 import { LABEL_STATES, MODES, QUALITIES, READING_KINDS, READING_STATES, SHARINGS, SPECIALS } from '@/lib/vocabularies';
 import { binaryText, createdAt, id, json, sha256, shortText, updatedAt, utcDateTime } from '../columns';
@@ -95,6 +96,10 @@ export const labels = mysqlTable(
     special: mysqlEnum('special', SPECIALS),
     numeral: json<Numeral>('numeral'),
     state: mysqlEnum('state', LABEL_STATES).notNull(),
+    /** Kinds that a person gave to notes of the span (lib/harmony/reading, MarkedTone); null for none. */
+    tones: json<readonly MarkedTone[]>('tones'),
+    /** Read in the key after it as well. */
+    pivot: boolean('pivot').notNull().default(false),
     certainty: double('certainty'),
     /** In a key: the span is a question. */
     asked: boolean('asked').notNull().default(true),

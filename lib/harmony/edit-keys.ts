@@ -112,3 +112,21 @@ type Reframe = (numeral: Numeral, from: Key, to: Key) => Numeral;
 export function countRewritten(before: Reading, after: Reading): number {
   return after.labels.filter((a) => before.labels.some((b) => b.id === a.id && !equalNumerals(a.numeral, b.numeral))).length;
 }
+
+/** How a pivot is read in the key that begins after it; null for a label that is none, or where no key begins after it. */
+export function findPivot(reading: Reading, label: Label): { readonly key: Key; readonly numeral: Numeral } | null {
+  const region = label.pivot ? reading.regions.find((r) => r.start === label.end) : undefined;
+  if (!region || !label.numeral) return null;
+  return { key: region.key, numeral: reframeNumeral(label.numeral, label.key, region.key) };
+}
+
+/** Makes a label a pivot, or none again: it must be the last one before another key. */
+export function togglePivot(reading: Reading, labelId: string): EditResult {
+  const label = reading.labels.find((l) => l.id === labelId);
+  const isLast = label && reading.regions.some((r) => r.start === label.end);
+  if (!label?.numeral || (!isLast && !label.pivot)) {
+    return err({ kind: 'nothing_changes', message: 'A pivot is the last label before another key.' });
+  }
+  const labels = reading.labels.map((l) => (l.id === labelId ? { ...l, pivot: l.pivot ? undefined : true } : l));
+  return edited(reading, { ...reading, labels });
+}

@@ -14,7 +14,7 @@ export function splitLabel(reading: Reading, labelId: string, at: number, newId:
   const label = reading.labels[index];
   if (!label) return err(UNKNOWN);
   if (at <= label.start || at >= label.end) return err(outside('A label can only be split at a note inside it.'));
-  const first: Label = { ...label, end: ticks(at) };
+  const first: Label = { ...label, end: ticks(at), pivot: undefined };
   const state = label.numeral ? 'changed' : label.state;
   const key = findKeyAt(reading, at) ?? label.key;
   const second: Label = { ...label, id: newId, key, start: ticks(at), state, certainty: null, others: [] };
@@ -29,7 +29,8 @@ export function mergeWithNext(reading: Reading, labelId: string): EditResult {
   if (!label) return err(UNKNOWN);
   if (!next) return err({ kind: 'nothing_after', message: 'There is no label after this one to join it with.' });
   const numeral = label.numeral ?? (equalKeys(label.key, next.key) ? next.numeral : null);
-  const merged: Label = { ...label, end: next.end, numeral, state: 'changed', certainty: null };
+  const tones = [...(label.tones ?? []), ...(next.tones ?? [])];
+  const merged: Label = { ...label, end: next.end, numeral, state: 'changed', certainty: null, pivot: next.pivot, tones: tones.length > 0 ? tones : undefined };
   const regions = next.end === reading.end ? dropRegionFrom(reading, next.start) : moveRegion(reading.regions, next.start, next.end);
   return edited(reading, { ...reading, regions, labels: reading.labels.toSpliced(index, 2, merged) });
 }

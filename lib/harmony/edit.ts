@@ -1,7 +1,7 @@
 import { type Result, err, ok } from '../result';
 import { type Key, equalKeys } from '../theory/key';
 import type { Numeral } from '../theory/numeral';
-import type { KeyRegion, Label, Reading } from './reading';
+import type { KeyRegion, Label, MarkedTone, NonChordKind, Reading } from './reading';
 
 /**
  * The difference between two states of a reading. `before` and `after` hold only what differs; a label that changed is in
@@ -113,9 +113,15 @@ export function equalLabels(a: Label, b: Label): boolean {
     a.end === b.end &&
     a.state === b.state &&
     a.certainty === b.certainty &&
+    (a.pivot ?? false) === (b.pivot ?? false) &&
+    equalTones(a.tones ?? [], b.tones ?? []) &&
     equalKeys(a.key, b.key) &&
     equalNumerals(a.numeral, b.numeral)
   );
+}
+
+function equalTones(a: readonly MarkedTone[], b: readonly MarkedTone[]): boolean {
+  return a.length === b.length && a.every((tone) => b.some((other) => other.noteId === tone.noteId && other.kind === tone.kind));
 }
 
 export function equalRegions(a: KeyRegion, b: KeyRegion): boolean {
@@ -169,6 +175,15 @@ function writeNumeral(label: Label, numeral: Numeral | null): Label {
 /** Accepts those of the labels that are suggestions; the others stay as they are. */
 export function acceptLabels(reading: Reading, labelIds: readonly string[]): EditResult {
   return mapLabels(reading, labelIds, (l) => (l.state === 'suggested' && l.numeral ? { ...l, state: 'accepted' } : l));
+}
+
+/** Says what kind of non-chord tone a note of a label is; null takes back what was said. */
+export function markTone(reading: Reading, labelId: string, noteId: number, kind: NonChordKind | null): EditResult {
+  return mapLabels(reading, [labelId], ({ tones = [], ...label }) => {
+    const others = tones.filter((tone) => tone.noteId !== noteId);
+    const marked = kind ? [...others, { noteId, kind }].sort((a, b) => a.noteId - b.noteId) : others;
+    return { ...label, tones: marked.length > 0 ? marked : undefined };
+  });
 }
 
 /** Suggestions that start in a span and that the engine holds at least this certain (0–1). */

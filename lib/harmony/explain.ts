@@ -6,7 +6,7 @@ import { findCadence } from './cadences';
 import { sortNotes } from './chord-tones';
 import { isInScale } from './key-terms';
 import { nameNonChordTone } from './non-chord-tones';
-import { type Label, type Reading, type Term, type Why } from './reading';
+import { type Label, type NonChordTone, type Reading, type Term, type Why } from './reading';
 import { findTendencyTones } from './tendency-tones';
 import { type VoiceIndex, indexVoices } from './voices';
 import { listWords, sayCadence, sayChord, sayNonChordTones, sayOtherFrame, sayQualityRule, sayTendencies } from './why-sentences';
@@ -33,7 +33,7 @@ export function explainLabel(score: Score, reading: Reading, labelIndex: number)
   const next = reading.labels[labelIndex + 1];
   const chordOf = (other: Label | undefined) => (other?.numeral ? spellNumeral(other.key, other.numeral) : null);
   const around = { start, end, chord: sorted.chord, chordBefore: chordOf(reading.labels[labelIndex - 1]), chordAfter: chordOf(next), voices };
-  const nonChordTones = sorted.others.map((note) => nameNonChordTone(note, around));
+  const nonChordTones = sorted.others.map((note) => asMarked(nameNonChordTone(note, around), label));
   const tendencyTones = findTendencyTones(notes, key, numeral, { start, end, nextEnd: next?.end ?? end, voices });
   const terms = weighLabel(score, reading, labelIndex);
   return {
@@ -52,6 +52,12 @@ export function explainLabel(score: Score, reading: Reading, labelIndex: number)
       ...sayOtherFrame(label),
     ],
   };
+}
+
+/** What a person said a note is holds against what we would call it. */
+function asMarked(tone: NonChordTone, label: Label): NonChordTone {
+  const marked = label.tones?.find(({ noteId }) => noteId === tone.noteId);
+  return marked ? { ...tone, kind: marked.kind } : tone;
 }
 
 function splitTerms(terms: readonly Term[]): Pick<Why, 'termsFor' | 'termsAgainst'> {

@@ -31,6 +31,16 @@ export interface Label {
   readonly certainty: number | null;
   /** The engine's runners-up for the span, best first. */
   readonly others: readonly OtherReading[];
+  /** Kinds that a person gave to notes of the span, against what would be said of them; absent where none was given. */
+  readonly tones?: readonly MarkedTone[] | undefined;
+  /** A person reads the label in the key that begins after it as well. */
+  readonly pivot?: boolean | undefined;
+}
+
+export interface MarkedTone {
+  /** A note of the score, by its id. */
+  readonly noteId: number;
+  readonly kind: NonChordKind;
 }
 
 export interface OtherReading {

@@ -1,6 +1,6 @@
 import { z } from 'zod';
 import type { Change } from '@/lib/harmony/edit';
-import { LABEL_STATES, type KeyRegion, type Label } from '@/lib/harmony/reading';
+import { LABEL_STATES, type KeyRegion, type Label, NON_CHORD_KINDS } from '@/lib/harmony/reading';
 import { ticks } from '@/lib/score/score';
 import { QUALITIES, sizeOf } from '@/lib/theory/chord';
 import { MODES, type Step } from '@/lib/theory/key';
@@ -44,6 +44,8 @@ const label: z.ZodType<Label> = z.object({
   state: z.enum(LABEL_STATES),
   certainty: certainty.nullable(),
   others: z.array(z.object({ key, numeral, certainty })).max(12),
+  tones: z.array(z.object({ noteId: z.int().min(0).max(1_000_000), kind: z.enum(NON_CHORD_KINDS) })).max(200).optional(),
+  pivot: z.boolean().optional(),
 });
 
 const region: z.ZodType<KeyRegion> = z.object({ start: tick, end: tick, key });

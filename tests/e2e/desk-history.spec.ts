@@ -1,6 +1,6 @@
 import AxeBuilder from '@axe-core/playwright';
 import { type Page, expect, test } from '@playwright/test';
-import { current, expectSaved, labels, spokenLabels, startReading } from '../support/desk-page';
+import { expectSaved, labels, spokenLabels, startReading } from '../support/desk-page';
 import { demoPerson, signIn } from '../support/e2e';
 
 async function write(page: Page, place: number, text: string): Promise<void> {

@@ -4,7 +4,7 @@ import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest';
 import { unsafeLoadReadingContent } from '@/db/queries/reading-rows';
 import { labels, readings, remarks, revisions } from '@/db/schema';
 import type { Actor } from '@/lib/auth/actor';
-import { type EditResult, acceptLabels, findTileFaults, invertChange, setNumeral } from '@/lib/harmony/edit';
+import { type EditResult, acceptLabels, edited, findTileFaults, invertChange, markTone, setNumeral } from '@/lib/harmony/edit';
 import { changeKeyFrom } from '@/lib/harmony/edit-keys';
 import { mergeWithNext, splitLabel } from '@/lib/harmony/edit-spans';
 import type { Reading } from '@/lib/harmony/reading';
@@ -175,6 +175,18 @@ describe('readNews', () => {
     const news = unwrap(await readNews(services.deps, me, { readingId, since: 1 }));
     expect(news).toMatchObject({ version: 2, revisions: [{ version: 2, by: colleague.name }] });
     expect(unwrap(await readNews(services.deps, me, { readingId, since: 2 })).revisions).toEqual([]);
+  });
+});
+
+describe('what a person says of a label beside its numeral', () => {
+  it('is kept: kinds of notes left over, and that it is a pivot', async () => {
+    await edit((r) => markTone(r, r.labels[0]!.id, 7, 'suspension'));
+    const pivot = (r: Reading): EditResult => edited(r, { ...r, labels: r.labels.map((l, i) => (i === 0 ? { ...l, pivot: true } : l)) });
+    await edit(pivot);
+    expect((await read()).reading.labels[0]).toMatchObject({ tones: [{ noteId: 7, kind: 'suspension' }], pivot: true });
+    await edit((r) => markTone(r, r.labels[0]!.id, 7, null));
+    const [first] = (await read()).reading.labels;
+    expect([first!.tones, first!.pivot]).toEqual([undefined, true]);
   });
 });
 
