@@ -62,7 +62,7 @@ function othersPage({ desk, score, sheet, label }: Shown): MarginPage {
   const { context } = desk;
   return {
     value: 'others',
-    label: `Other readings ${label.others.length || ''}`,
+    label: `Others ${label.others.length || ''}`,
     content: <OthersPanel score={score} label={label} sheet={sheet} onChoose={context.powers.write ? (other) => chooseOther(context, other) : undefined} />,
   };
 }

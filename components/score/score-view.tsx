@@ -9,7 +9,7 @@ import { useNearSheets } from './use-near-sheets';
 import { useSheetWidth } from './use-sheet-width';
 
 /** Room under each system for the key line and two rows of numerals, in engraving pixels. */
-export const LANE_ROOM = 104;
+export const LANE_ROOM = 112;
 
 export interface ScoreViewProps {
   /** Partwise MusicXML of the whole score. */

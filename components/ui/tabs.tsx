@@ -20,7 +20,7 @@ export function Tabs({ label, tabs, value, onValueChange }: TabsProps) {
           <Parts.Trigger
             key={tab.value}
             value={tab.value}
-            className="-mb-px min-h-9 border border-transparent px-3 text-base whitespace-nowrap text-ink-soft hover:text-ink data-[state=active]:border-rule-strong data-[state=active]:border-b-paper data-[state=active]:bg-paper data-[state=active]:text-ink"
+            className="-mb-px min-h-9 border border-transparent px-2.5 text-base whitespace-nowrap text-ink-soft hover:text-ink data-[state=active]:border-rule-strong data-[state=active]:border-b-paper data-[state=active]:bg-paper data-[state=active]:text-ink"
           >
             {tab.label}
           </Parts.Trigger>

@@ -79,7 +79,7 @@ test('by mouse alone: choose a label, accept it, accept the bar, take another re
   await page.getByRole('button', { name: 'More' }).click();
   await page.getByRole('menuitem', { name: 'Accept the bar' }).click();
   await labels(page).nth(5).click();
-  await page.getByRole('tab', { name: /^Other readings/ }).click();
+  await page.getByRole('tab', { name: /^Others/ }).click();
   await page.getByRole('tabpanel').getByRole('button').first().click();
   await expect(labels(page).nth(5)).toHaveAttribute('data-state', 'written by hand');
   await page.getByRole('button', { name: 'More' }).click();
