@@ -9,7 +9,7 @@
  *  Field                   label, hint, error round one Input, TextArea or Select (ids are wired by context)
  *  Checkbox, Radio, Choices  rows with labels; a fieldset with its legend
  *  Dialog, DialogActions, Confirm   modal sheet; Confirm for what cannot be undone
- *  Menu, MenuAction, MenuLink, MenuChoice, MenuRule, MenuHeading
+ *  Menu, MenuAction, MenuLink, MenuDownload, MenuChoice, MenuRule, MenuHeading
  *  Tabs, Tooltip
  *  Table, Row, Th, SortTh, Td       inside Table: thead/tbody of Row
  *  Announcements, useAnnouncer      announce(text, undo?) and warn(text): on screen and to screen readers
@@ -27,7 +27,7 @@ export { DateText } from './date-text';
 export { Confirm, Dialog, DialogActions } from './dialog';
 export { Field, useFieldIds } from './field';
 export { Input, Select, TextArea } from './input';
-export { Menu, MenuAction, MenuChoice, MenuHeading, MenuLink, MenuRule } from './menu';
+export { Menu, MenuAction, MenuChoice, MenuDownload, MenuHeading, MenuLink, MenuRule } from './menu';
 export { EmptyState, ErrorNote, SettledNote, WarningNote } from './notes';
 export { Facts, PageHeader, Section } from './page-header';
 export { Pagination } from './pagination';

@@ -12,7 +12,7 @@ interface MenuProps {
   readonly children: ReactNode;
 }
 
-/** A menu of actions. Its children are MenuAction, MenuLink, MenuChoice, MenuRule and MenuHeading. */
+/** A menu of actions. Its children are MenuAction, MenuLink, MenuDownload, MenuChoice, MenuRule and MenuHeading. */
 export function Menu({ trigger, align = 'end', children }: MenuProps) {
   return (
     <DropdownMenu.Root modal={false}>
@@ -54,6 +54,15 @@ export function MenuLink({ href, children }: { readonly href: string; readonly c
   return (
     <DropdownMenu.Item asChild>
       <Link href={href} className={ROW}>{children}</Link>
+    </DropdownMenu.Item>
+  );
+}
+
+/** A file to take along; the browser saves it. */
+export function MenuDownload({ href, children }: { readonly href: string; readonly children: ReactNode }) {
+  return (
+    <DropdownMenu.Item asChild>
+      <a href={href} download className={ROW}>{children}</a>
     </DropdownMenu.Item>
   );
 }

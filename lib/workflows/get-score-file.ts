@@ -12,13 +12,13 @@ export interface ScoreFile {
 }
 
 /** Source: W3C MusicXML 4.0, media types of compressed and of plain files. */
-const COMPRESSED = 'application/vnd.recordare.musicxml';
-const PLAIN = 'application/vnd.recordare.musicxml+xml';
+export const MXL_MEDIA_TYPE = 'application/vnd.recordare.musicxml';
+export const MUSICXML_MEDIA_TYPE = 'application/vnd.recordare.musicxml+xml';
 
 /** The uploaded file of a score, byte for byte. */
 export async function getScoreFile(deps: Deps, actor: Actor, { scoreId }: ScoreInput): Promise<Result<ScoreFile, AppError>> {
   const score = await findScore(deps.db, actor, scoreId);
   const bytes = score ? await deps.storage.get(score.sha256) : null;
   if (!score || !bytes) return err(appError('not_found'));
-  return ok({ bytes, fileName: score.fileName, mediaType: /\.mxl$/i.test(score.fileName) ? COMPRESSED : PLAIN });
+  return ok({ bytes, fileName: score.fileName, mediaType: /\.mxl$/i.test(score.fileName) ? MXL_MEDIA_TYPE : MUSICXML_MEDIA_TYPE });
 }

@@ -82,6 +82,7 @@ export const readingCases: Cases = {
   ...onEach('readings.read', reads, SEEN),
   ...onEach('readings.news', reads, SEEN),
   ...onEach('readings.score', reads, SEEN),
+  ...onEach('readings.download', (which) => (world) => ({ readingId: which(world), form: 'musicxml' }), SEEN),
   ...onEach('readings.edit', edits, EDITED),
   ...onEach('readings.revisions', reads, EDITED),
   ...onEach('remarks.list', reads, SEEN),
@@ -89,6 +90,10 @@ export const readingCases: Cases = {
   ...onEach('remarks.add', remarksOn, SEEN),
   'readings.read (work)': { input: readsWork, expected: WORK_READERS },
   'readings.score (work)': { input: readsWork, expected: WORK_READERS },
+  'readings.download (work)': {
+    input: async (world, deps) => ({ readingId: await readingOfWork(world, deps), form: 'csv' }),
+    expected: may('assistant', 'instructor', 'owner'),
+  },
   'readings.edit (work)': { input: namesFirst(readingOfWork), expected: may('student') },
   'readings.revisions (work)': { input: readsWork, expected: may('student') },
   'remarks.people (work)': { input: readsWork, expected: WORK_READERS },

@@ -1,3 +1,4 @@
+import { DownloadMenu } from '@/components/library/download-menu';
 import { Button, ButtonLink, Menu, MenuHeading, MenuLink, MenuRule } from '@/components/ui';
 
 interface DeskActionsProps {
@@ -30,6 +31,7 @@ export function DeskActions({ readingId, others, besideId, staff, editable }: De
           ) : null}
         </Menu>
       ) : null}
+      <DownloadMenu readingId={readingId} />
       <ButtonLink size="small" kind={editable ? 'plain' : 'quiet'} href={`/handouts/${readingId}`}>Handout</ButtonLink>
     </span>
   );

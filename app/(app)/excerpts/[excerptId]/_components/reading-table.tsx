@@ -1,3 +1,4 @@
+import { DownloadMenu } from '@/components/library/download-menu';
 import { progressOfReading } from '@/components/library/excerpt-progress';
 import { ButtonLink, DateText, Progress, Row, StateMark, Table, Tag, Td, Th } from '@/components/ui';
 import type { ReadingListRow } from '@/db/queries/excerpts';
@@ -82,6 +83,7 @@ function ReadingActions({ excerptId, excerptTitle, reading, ownId }: ReadingActi
     <div className="flex flex-wrap gap-1.5 sm:justify-end">
       {ownerId === ownId ? null : <StartReading small excerptId={excerptId} basedOn={id}>Start mine from this</StartReading>}
       {kind === 'person' ? <MakeKey excerptId={excerptId} excerptTitle={excerptTitle} reading={{ id, title, open: labelCount - settledCount }} /> : null}
+      <DownloadMenu readingId={id} title={title} />
       <ButtonLink size="small" href={`/handouts/${id}`} aria-label={`Hand out: ${title}`}>Hand out</ButtonLink>
       <ButtonLink size="small" href={`/desk/${id}`} aria-label={`Open at the desk: ${title}`}>Desk</ButtonLink>
     </div>
