@@ -48,9 +48,9 @@ function Members({ members, ownId }: MemberTableProps) {
       <thead>
         <Row>
           <Th>Name</Th>
-          <Th>E-mail</Th>
+          <Th className="hidden md:table-cell">E-mail</Th>
           <Th>Role</Th>
-          <Th>Since</Th>
+          <Th className="hidden lg:table-cell">Since</Th>
           <Th><span className="sr-only">Actions</span></Th>
         </Row>
       </thead>
@@ -65,10 +65,13 @@ function MemberLine({ member, own }: { readonly member: MemberRow; readonly own:
   const { name, email, since } = member;
   return (
     <Row>
-      <Th scope="row">{name}{own ? <span className="text-ink-soft"> (you)</span> : null}</Th>
-      <Td>{email}</Td>
+      <Th scope="row">
+        {name}{own ? <span className="text-ink-soft"> (you)</span> : null}
+        <p className="text-small font-normal break-all text-ink-soft md:hidden">{email}</p>
+      </Th>
+      <Td className="hidden md:table-cell">{email}</Td>
       <Td><RoleChoice member={member} /></Td>
-      <Td className="whitespace-nowrap">{since}</Td>
+      <Td className="hidden whitespace-nowrap lg:table-cell">{since}</Td>
       <Td className="text-right"><MemberMenu member={member} own={own} /></Td>
     </Row>
   );
@@ -83,10 +86,10 @@ function RoleChoice({ member }: { readonly member: MemberRow }) {
     if (!(await act(() => changeRole({ userId, role: chosen }), `${name} is now ${chosen}.`))) setChosen(role);
   };
   return (
-    <span className="flex items-center gap-2">
+    <span className="flex flex-wrap items-center gap-2">
       <Select
         aria-label={`Role of ${name}`}
-        className="w-36"
+        className="w-30 sm:w-36"
         value={chosen}
         disabled={busy}
         onChange={(event) => setChosen(ROLES.find((choice) => choice === event.target.value) ?? role)}
