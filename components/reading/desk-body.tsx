@@ -33,7 +33,7 @@ export function DeskBody(props: DeskBodyProps) {
   const { score, base, mode, firstBar, lastBar, onProgress, onSaving } = props;
   const spelling = useSpelling(props);
   const { sheet } = spelling;
-  const [state, dispatch] = useDeskState(props);
+  const [state, dispatch] = useDeskState(props, score);
   const desk = useDesk(props, score, typeof window !== 'undefined' && window.innerWidth < WIDE ? 0.7 : 0.8, state, dispatch);
   const { context, isGiven } = desk;
   const saving = useSaving(context.powers.write ? base : null, props.userId, state, dispatch);

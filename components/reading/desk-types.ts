@@ -62,6 +62,8 @@ export interface DeskProps {
   readonly beside?: BesideReading;
   /** A tick to open on; the first label otherwise. */
   readonly openAt?: number;
+  /** The bar to open on, by its printed number; goes before `openAt`. */
+  readonly openBar?: string;
   /** The page of the margin to open on. */
   readonly openPage?: 'remarks';
   /** Told after every change of the reading: how many labels are settled. */

@@ -42,7 +42,7 @@ export function ScoreRegion(props: ScoreRegionProps) {
   const region = useRef<HTMLDivElement>(null);
   const [tables, setTables] = useState(false);
   const label = getSelected(state);
-  useFocusFollows(region, label.id, desk.opened.kind);
+  useFocusFollows(region, label, desk);
 
   return (
     <div ref={region} className="min-w-0 flex-1 overflow-auto bg-sheet" data-score-region>
@@ -72,7 +72,9 @@ export function ScoreRegion(props: ScoreRegionProps) {
  * Keeps the keyboard on the selected label once it is in the region, and gives it back when what was opened closes. In
  * the same turn as the change, so that the next key is not lost.
  */
-function useFocusFollows(region: { readonly current: HTMLElement | null }, labelId: string, opened: string): void {
+function useFocusFollows(region: { readonly current: HTMLElement | null }, label: Label, desk: Desk): void {
+  const labelId = label.id;
+  const opened = desk.opened.kind;
   const before = useRef({ labelId, opened });
   useLayoutEffect(() => {
     const was = before.current;
@@ -81,7 +83,9 @@ function useFocusFollows(region: { readonly current: HTMLElement | null }, label
     if (opened !== 'none' || !(closed || was.labelId !== labelId)) return;
     const find = () => region.current?.querySelector<HTMLElement>(`[data-label="${labelId}"]`);
     const active = document.activeElement;
-    if (closed || active === document.body || region.current?.contains(active)) find()?.focus();
+    const keyboard = closed || active === document.body || (region.current?.contains(active) ?? false);
+    if (!find()) desk.await(label, keyboard);
+    else if (keyboard) find()?.focus();
     else find()?.scrollIntoView({ block: 'nearest', inline: 'nearest' });
     // A dialog lets go of the keyboard only after it has closed.
     if (was.opened === 'key' || was.opened === 'help' || was.opened === 'accept-from') setTimeout(() => find()?.focus(), 0);

@@ -2,13 +2,13 @@
 
 import { type Dispatch, useCallback, useMemo, useReducer, useRef, useState } from 'react';
 import type { SheetGeometry } from '@/components/score/geometry';
-import { placeTick } from '@/components/score/geometry';
+import { findBarAt, placeTick } from '@/components/score/geometry';
 import { onsetsOf } from '@/components/score/beats';
 import type { LabelPattern } from '@/lib/harmony/edit-pattern';
 import type { Label } from '@/lib/harmony/reading';
 import type { Score } from '@/lib/score/score';
 import type { DeskContext } from './commands';
-import { type DeskAction, type DeskState, openDesk, reduceDesk } from './desk-state';
+import { type DeskAction, type DeskState, getSelected, openDesk, reduceDesk } from './desk-state';
 import { type DeskProps, type Powers, isGiven, powersOf } from './desk-types';
 import { type KeyBindings, bindKeys, keepOwnKeys, readOwnKeys } from './key-bindings';
 import { type Beside, useBeside } from './use-beside';
@@ -34,8 +34,16 @@ export interface Desk {
   readonly marginOpen: boolean;
   setMarginOpen(open: boolean): void;
   isGiven(label: Label): boolean;
+  /** Brings a label into view as soon as its sheet is drawn, and gives it the keyboard if wanted. */
+  await(label: Label, keyboard: boolean): void;
   /** A sheet was drawn: what stands above and below what is read off it. */
   noteGeometry(geometry: SheetGeometry): void;
+}
+
+/** A label that is to be seen, on a sheet that is not drawn yet. */
+interface Awaited {
+  readonly label: Label;
+  readonly keyboard: boolean;
 }
 
 export const ZOOMS = [0.5, 0.6, 0.7, 0.8, 0.9, 1, 1.15, 1.3, 1.5, 1.75, 2] as const;
@@ -59,14 +67,25 @@ export function useDesk(props: DeskProps, score: Score, startZoom: number, state
   };
   const [pattern, keepPattern] = useState<LabelPattern | null>(null);
   const sound = useSound(score, state, dispatch);
+  // At first the label the desk opens on; at the beginning there is nothing to bring into view.
+  const awaited = useRef<Awaited | null>(props.openAt === undefined && !props.openBar ? null : { label: getSelected(state), keyboard: false });
   const geometries = useRef(new Map<number, SheetGeometry>());
   const powers = useMemo(() => powersOf(mode, rules, props.beside !== undefined), [mode, rules, props.beside]);
   const beside = useBeside(props.beside, state, dispatch);
   const onsets = useMemo(() => onsetsOf(score, reading.start, reading.end), [score, reading.start, reading.end]);
   const given = useCallback((label: Label) => isGiven(label, rules), [rules]);
+  const awaitLabel = useCallback((label: Label, keyboard: boolean) => {
+    awaited.current = { label, keyboard };
+  }, []);
   const noteGeometry = useCallback((geometry: SheetGeometry) => {
     const first = geometry.bars[0];
     if (first) geometries.current.set(first.bar, geometry);
+    const { label, keyboard } = awaited.current ?? {};
+    const element = label && findBarAt(geometry, label.start) ? document.querySelector<HTMLElement>(`[data-label="${label.id}"]`) : null;
+    if (!element) return;
+    awaited.current = null;
+    element.scrollIntoView({ block: 'center', inline: 'nearest' });
+    if (keyboard) element.focus({ preventScroll: true });
   }, []);
 
   const context: DeskContext = {
@@ -104,7 +123,7 @@ export function useDesk(props: DeskProps, score: Score, startZoom: number, state
       stop: sound.stop,
     },
   };
-  return { context, opened, open, zoom, arrows, sound, keys, setKeys, beside, page, setPage, remarkTurn, marginOpen, setMarginOpen, isGiven: given, noteGeometry };
+  return { context, opened, open, zoom, arrows, sound, keys, setKeys, beside, page, setPage, remarkTurn, marginOpen, setMarginOpen, isGiven: given, await: awaitLabel, noteGeometry };
 }
 
 /** The first of the notes left over, once the margin shows them. */
@@ -112,8 +131,9 @@ function focusTones(): void {
   setTimeout(() => document.querySelector<HTMLElement>('[data-left-over] select')?.focus(), 0);
 }
 
-export function useDeskState(props: DeskProps): [DeskState, Dispatch<DeskAction>] {
-  return useReducer(reduceDesk, props, ({ reading, version, openAt }) => {
+export function useDeskState(props: DeskProps, score: Score): [DeskState, Dispatch<DeskAction>] {
+  return useReducer(reduceDesk, props, ({ reading, version, openBar, openAt: tick }) => {
+    const openAt = score.bars.find((bar) => openBar && bar.number === openBar && bar.start + bar.length > reading.start)?.start ?? tick;
     const desk = openDesk(reading, version);
     const opening = reading.labels.findLast((l) => openAt !== undefined && l.start <= openAt);
     return opening ? { ...desk, selectedId: opening.id } : desk;

@@ -1,6 +1,6 @@
 'use client';
 
-import { type CSSProperties, type ReactNode, useMemo, useRef, useState } from 'react';
+import { type CSSProperties, type ReactNode, type RefObject, useLayoutEffect, useMemo, useRef, useState } from 'react';
 import type { Score } from '@/lib/score/score';
 import { EngravedSheet } from './engraved-sheet';
 import type { SheetGeometry } from './geometry';
@@ -38,6 +38,8 @@ export function ScoreView({ xml, score, firstBar, lastBar, zoom, room = LANE_ROO
   const held = ranges.findIndex((r) => isIn(score, r, heldTick));
   const near = useNearSheets(region, ranges.length, held);
 
+  useOpening(region, engraved !== null, held);
+
   const heights = [...known].map(([index, g]) => ({ range: ranges[index] ?? { first: 0, last: 0 }, height: g.height }));
   const staves = score.parts.reduce((sum, part) => sum + part.staves, 0);
 
@@ -72,6 +74,16 @@ export function ScoreView({ xml, score, firstBar, lastBar, zoom, room = LANE_ROO
       })}
     </div>
   );
+}
+
+/** Scrolls once, before anything is drawn, to the sheet that the view opens on: those before it need not be drawn then. */
+function useOpening(region: RefObject<HTMLElement | null>, isMeasured: boolean, held: number): void {
+  const opened = useRef(false);
+  useLayoutEffect(() => {
+    if (!isMeasured || opened.current) return;
+    opened.current = true;
+    if (held > 0) region.current?.querySelector(`[data-sheet="${held}"]`)?.scrollIntoView({ block: 'start' });
+  }, [region, isMeasured, held]);
 }
 
 function isIn(score: Score, range: SheetRange, tick: number): boolean {

@@ -8,20 +8,25 @@ const LASTING = ['divisions', 'key', 'time', 'staves', 'part-symbol', 'instrumen
 
 /** `first` and `last`: 0-based places of the bars kept, in file order, the last included. The document is not changed. */
 export function sliceMeasures(document: Document, first: number, last: number): Document {
-  const copy = document.cloneNode(true) as Document;
-  for (const part of copy.querySelectorAll('score-partwise > part')) slicePart(part, first, last);
+  const copy = document.implementation.createDocument(null, null);
+  const root = copy.importNode(document.documentElement, false);
+  copy.append(root);
+  // Only what is kept is copied: of a long score that is little.
+  for (const child of document.documentElement.children) root.append(child.tagName === 'part' ? slicePart(copy, child, first, last) : copy.importNode(child, true));
   return copy;
 }
 
-function slicePart(part: Element, first: number, last: number): void {
+function slicePart(copy: Document, part: Element, first: number, last: number): Element {
+  const kept = copy.importNode(part, false);
   const measures = [...part.children].filter((child) => child.tagName === 'measure');
-  const opening = measures[first];
   const inForce = new Map<string, Element>();
   for (const measure of measures.slice(0, first)) collectAttributes(measure, inForce);
-  measures.forEach((measure, index) => (index < first || index > last) && measure.remove());
-  if (!opening || first === 0) return;
+  for (const measure of measures.slice(first, last + 1)) kept.append(copy.importNode(measure, true));
+  const opening = kept.firstElementChild;
+  if (!opening || first === 0) return kept;
   openWith(opening, inForce);
-  dropLooseEnds(part);
+  dropLooseEnds(kept);
+  return kept;
 }
 
 function collectAttributes(measure: Element, inForce: Map<string, Element>): void {
@@ -37,7 +42,7 @@ function openWith(measure: Element, inForce: Map<string, Element>): void {
   for (const child of leading?.children ?? []) inForce.set(`${child.tagName} ${child.getAttribute('number') ?? ''}`, child);
   const opening = measure.ownerDocument.createElement('attributes');
   const elements = [...inForce.values()].sort((a, b) => LASTING.indexOf(a.tagName) - LASTING.indexOf(b.tagName));
-  for (const element of elements) opening.append(element.cloneNode(true));
+  for (const element of elements) opening.append(measure.ownerDocument.importNode(element, true));
   leading?.remove();
   measure.prepend(opening);
 }

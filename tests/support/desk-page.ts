@@ -41,3 +41,21 @@ export async function tabToScore(page: Page): Promise<void> {
   }
   throw new Error('the score was not reached with sixty Tabs');
 }
+
+/** Uploads a score and cuts one excerpt of it; gives the excerpt's page, once the proposal is there. */
+export async function addExcerptOf(page: Page, file: { readonly name: string; readonly xml: string }, title: string, lastBar: number): Promise<void> {
+  await page.goto('/library');
+  await page.getByLabel('MusicXML files').setInputFiles({ name: file.name, mimeType: 'application/xml', buffer: Buffer.from(file.xml) });
+  await page.getByLabel(/^Source/).fill('Made for the tests');
+  await page.getByLabel(/^Rights/).fill('Public domain');
+  await page.getByRole('button', { name: 'Add the score to the library' }).click();
+  await expect(page.getByText('in the library', { exact: true }).or(page.getByText(/holds this file already/))).toBeVisible({ timeout: 90_000 });
+  await page.goto('/library');
+  await page.getByRole('link', { name: title, exact: true }).first().click();
+  await page.getByLabel('From bar').fill('1');
+  await page.getByLabel('To bar').fill(String(lastBar));
+  await page.getByLabel('To bar').press('Tab');
+  await page.getByLabel('What it is for').fill('To be opened at the desk');
+  await page.getByRole('button', { name: 'Cut the excerpt' }).click();
+  await expect(page.getByRole('row', { name: 'Proposal' })).toContainText(/labels? proposed/, { timeout: 120_000 });
+}

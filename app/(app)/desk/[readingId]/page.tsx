@@ -18,7 +18,7 @@ import { listSpellings } from './_components/spellings';
 
 interface DeskPageProps {
   readonly params: Promise<{ readonly readingId: string }>;
-  readonly searchParams: Promise<{ readonly at?: string; readonly beside?: string; readonly margin?: string }>;
+  readonly searchParams: Promise<{ readonly at?: string; readonly beside?: string; readonly margin?: string; readonly bar?: string }>;
 }
 
 async function getHead(actor: Actor, readingId: string): Promise<ReadingHead> {
@@ -35,7 +35,7 @@ export async function generateMetadata({ params }: DeskPageProps): Promise<Metad
 export default async function DeskPage({ params, searchParams }: DeskPageProps) {
   const actor = await requireActor();
   const { readingId } = await params;
-  const { at: atText, beside: besideId, margin } = await searchParams;
+  const { at: atText, beside: besideId, margin, bar } = await searchParams;
   const at = Number(atText);
   const head = await getHead(actor, readingId);
   const submissionId = head.kind === 'submission' ? await findOwnSubmissionOfReading(createDeps().db, actor, readingId) : null;
@@ -66,6 +66,7 @@ export default async function DeskPage({ params, searchParams }: DeskPageProps) 
         spellings={spellings}
         courseId={courseId}
         {...(beside ? { beside } : {})}
+        {...(bar ? { openBar: bar } : {})}
         {...(margin === 'remarks' ? { openPage: margin } : {})}
         {...(Number.isFinite(at) ? { openAt: at } : {})}
       />
