@@ -1,7 +1,5 @@
 import { z } from 'zod';
-import { noteAudit } from '@/db/queries/audit';
 import { findExcerpt } from '@/db/queries/excerpts';
-import { insertReading, insertReadingContent } from '@/db/queries/reading-rows';
 import { unsafeFindScoreFile } from '@/db/queries/score-files';
 import type { Actor } from '@/lib/auth/actor';
 import { type AppError, appError } from '@/lib/errors';
@@ -12,7 +10,7 @@ import { ANALYSIS_SOURCES, importAnalysis } from '@/lib/score/import-analysis';
 import { openScoreFile } from '@/lib/score/open-score-file';
 import { ticks } from '@/lib/score/score';
 import { type Deps, inTransaction } from './deps';
-import type { StartedReading } from './start-reading';
+import { type StartedReading, keepNewReading } from './start-reading';
 
 export const importReadingInput = z.object({
   excerptId: z.uuid(),
@@ -38,24 +36,7 @@ export async function importReading(deps: Deps, actor: Actor, { excerptId, sourc
   const { startTick, endTick } = excerpt;
   const reading = readFile(deps, bytes, source, startTick, endTick);
   if (!reading) return err(appError('bad_input', 'These bars hold no labels of that kind.'));
-  return inTransaction(deps, async (inside) => {
-    const readingId = inside.newId();
-    await insertReading(inside.db, {
-      id: readingId,
-      excerptId,
-      departmentId: actor.departmentId,
-      ownerId: actor.userId,
-      kind: 'person',
-      title: TITLES[source],
-      state: 'open',
-      startTick,
-      endTick,
-      basedOn: null,
-    });
-    await insertReadingContent(inside.db, readingId, reading);
-    await noteAudit(inside, actor, { verb: 'start', subjectKind: 'reading', subjectId: readingId });
-    return ok({ readingId, excerptId });
-  });
+  return inTransaction(deps, (inside) => keepNewReading(inside, actor, { excerpt, kind: 'person', title: TITLES[source], basedOn: null, content: reading }));
 }
 
 function readFile(deps: Deps, bytes: Uint8Array, source: ImportReadingInput['source'], startTick: number, endTick: number): Reading | null {

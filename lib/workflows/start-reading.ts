@@ -67,26 +67,43 @@ interface Copy extends Source {
 }
 
 function copyReading(deps: Deps, actor: Actor, copy: Copy): Promise<Result<StartedReading, AppError>> {
-  const { id: excerptId, startTick, endTick } = copy.excerpt;
+  const { excerpt, basedOn, kind, title } = copy;
+  const { startTick, endTick } = excerpt;
   return inTransaction(deps, async (inside) => {
-    const stored = await unsafeLoadReadingContent(inside.db, { id: copy.basedOn, startTick, endTick });
-    const readingId = inside.newId();
-    await insertReading(inside.db, {
-      id: readingId,
-      excerptId,
-      departmentId: actor.departmentId,
-      ownerId: actor.userId,
-      kind: copy.kind,
-      title: copy.title.slice(0, 300),
-      state: 'open',
-      startTick,
-      endTick,
-      basedOn: copy.basedOn,
-    });
-    await insertReadingContent(inside.db, readingId, withNewIds(inside, copy.content(stored)));
-    await noteAudit(inside, actor, { verb: 'start', subjectKind: copy.kind === 'key' ? 'key' : 'reading', subjectId: readingId });
-    return ok({ readingId, excerptId });
+    const stored = await unsafeLoadReadingContent(inside.db, { id: basedOn, startTick, endTick });
+    return keepNewReading(inside, actor, { excerpt, kind, title, basedOn, content: withNewIds(inside, copy.content(stored)) });
   });
+}
+
+export interface NewReading {
+  readonly excerpt: ExcerptRow;
+  readonly kind: ReadingKind;
+  readonly title: string;
+  /** The reading that it was copied from. */
+  readonly basedOn: string | null;
+  /** Its labels have ids that no other reading has. */
+  readonly content: StoredReading;
+}
+
+/** Keeps a new reading of the actor's own; call it inside a transaction. */
+export async function keepNewReading(inside: Deps, actor: Actor, { excerpt, kind, title, basedOn, content }: NewReading): Promise<Result<StartedReading, AppError>> {
+  const { id: excerptId, startTick, endTick } = excerpt;
+  const readingId = inside.newId();
+  await insertReading(inside.db, {
+    id: readingId,
+    excerptId,
+    departmentId: actor.departmentId,
+    ownerId: actor.userId,
+    kind,
+    title: title.slice(0, 300),
+    state: 'open',
+    startTick,
+    endTick,
+    basedOn,
+  });
+  await insertReadingContent(inside.db, readingId, content);
+  await noteAudit(inside, actor, { verb: 'start', subjectKind: kind === 'key' ? 'key' : 'reading', subjectId: readingId });
+  return ok({ readingId, excerptId });
 }
 
 function withNewIds(deps: Deps, stored: StoredReading): StoredReading {
