@@ -5,7 +5,7 @@ import type { Actor } from '@/lib/auth/actor';
 import { type AppError, appError } from '@/lib/errors';
 import { readingFrom } from '@/lib/harmony/annotations';
 import type { Reading } from '@/lib/harmony/reading';
-import { type Result, err, ok } from '@/lib/result';
+import { type Result, err } from '@/lib/result';
 import { ANALYSIS_SOURCES, importAnalysis } from '@/lib/score/import-analysis';
 import { openScoreFile } from '@/lib/score/open-score-file';
 import { ticks } from '@/lib/score/score';
