@@ -153,6 +153,16 @@ export async function unsafeListQuestions(db: Db, assignmentId: string): Promise
     .orderBy(asc(questions.startTick));
 }
 
+/** What assignments accept beside the labels of a key, by the labels' starts. Whoever calls it has found the key as someone who may see it. */
+export async function unsafeListAccepted(db: Db, keyReadingId: string): Promise<Pick<Question, 'startTick' | 'alternatives'>[]> {
+  return db
+    .select({ startTick: questions.startTick, alternatives: questions.alternatives })
+    .from(questions)
+    .innerJoin(assignments, eq(assignments.id, questions.assignmentId))
+    .where(and(eq(assignments.keyReadingId, keyReadingId), isNull(assignments.deletedAt)))
+    .orderBy(asc(questions.startTick));
+}
+
 /** The reading that marks are given against, for those who prepare and mark. */
 export interface KeyRow {
   readonly id: string;

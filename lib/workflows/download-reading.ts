@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { unsafeListAccepted } from '@/db/queries/assignments';
 import { findReading } from '@/db/queries/readings';
 import { unsafeFindScoreFile } from '@/db/queries/score-files';
 import type { Actor } from '@/lib/auth/actor';
@@ -8,7 +9,7 @@ import type { Reading } from '@/lib/harmony/reading';
 import { reportOf } from '@/lib/harmony/report';
 import { type Result, err, ok } from '@/lib/result';
 import { annotateFile } from '@/lib/score/annotate-file';
-import type { Annotation } from '@/lib/score/annotation';
+import type { Annotation, KeyedNumeral } from '@/lib/score/annotation';
 import { readScore } from '@/lib/score/read-score';
 import type { Score } from '@/lib/score/score';
 import { formatLabelsAsCsv } from '@/lib/score/write-csv';
@@ -39,7 +40,8 @@ export async function downloadReading(deps: Deps, actor: Actor, { readingId, for
   if (head.state !== 'open') return err(appError('not_ready', 'The proposal is still being worked out. Wait a moment.'));
   const score = readScore(bytes);
   if (!score.ok) return err(appError('bad_input', score.error.message));
-  const written = WRITERS[form](bytes, score.value, await loadReading(deps, actor, head));
+  const accepted = head.kind === 'key' ? await unsafeListAccepted(deps.db, readingId) : [];
+  const written = WRITERS[form](bytes, score.value, await loadReading(deps, actor, head), accepted);
   return written.ok ? ok({ ...written.value, fileName: `${head.excerptTitle}, ${head.title}.${written.value.ending}` }) : written;
 }
 
@@ -49,11 +51,17 @@ interface Written {
   readonly mediaType: string;
 }
 
-type Writer = (bytes: Uint8Array, score: Score, reading: Reading) => Result<Written, AppError>;
+/** What counts as right beside the label that starts there. */
+interface Accepted {
+  readonly startTick: number;
+  readonly alternatives: readonly KeyedNumeral[];
+}
+
+type Writer = (bytes: Uint8Array, score: Score, reading: Reading, accepted: readonly Accepted[]) => Result<Written, AppError>;
 
 const WRITERS: Readonly<Record<DownloadReadingInput['form'], Writer>> = {
-  musicxml: (bytes, score, reading) => {
-    const annotated = annotateFile(bytes, untilTheEnd(score, reading));
+  musicxml: (bytes, score, reading, accepted) => {
+    const annotated = annotateFile(bytes, withAccepted(untilTheEnd(score, reading), accepted));
     if (!annotated.ok) return err(appError('bad_input', annotated.error.message));
     const [ending, mediaType] = isZip(bytes) ? ['mxl', MXL_MEDIA_TYPE] : ['musicxml', MUSICXML_MEDIA_TYPE];
     return ok({ bytes: new Uint8Array(annotated.value), ending, mediaType });
@@ -73,4 +81,11 @@ function untilTheEnd(score: Score, reading: Reading): Annotation[] {
   const last = labels.at(-1);
   if (!last?.numeral || !lastBar || reading.end >= lastBar.start + lastBar.length) return labels;
   return [...labels, { start: reading.end, key: last.key, numeral: null }];
+}
+
+function withAccepted(labels: readonly Annotation[], accepted: readonly Accepted[]): Annotation[] {
+  return labels.map((label) => {
+    const alternatives = accepted.filter(({ startTick }) => startTick === label.start).flatMap((one) => one.alternatives);
+    return label.numeral && alternatives.length > 0 ? { ...label, alternatives } : label;
+  });
 }

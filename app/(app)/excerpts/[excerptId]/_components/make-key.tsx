@@ -33,7 +33,7 @@ export function MakeKey({ excerptId, excerptTitle, reading }: MakeKeyProps) {
         open={shown}
         onOpenChange={setShown}
         title="Make an answer key"
-        description={`A copy of “${reading.title}” that assignments are marked against. At the desk you say which other answers are right.`}
+        description={`A copy of “${reading.title}” that assignments are marked against. In the assignment you say which other answers are right.`}
       >
         <form onSubmit={(event) => void make(event)} noValidate className="flex flex-col gap-4">
           {problem ? <ErrorNote>{problem}</ErrorNote> : null}
