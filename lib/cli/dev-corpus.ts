@@ -58,17 +58,17 @@ function readItem([slug = '', kind = '', , , folder = '']: readonly string[], re
   return { slug, kind, set: setOf(slug, kind, folder), score, slices, reference: readReference(report, score) };
 }
 
-/** Divides the sets over `count` folds, the largest first to the emptiest fold, each kind of music by itself. */
+/** Divides the sets over `count` folds by their notes, the largest first to the emptiest fold, each kind of music by itself. */
 export function assignFolds(items: readonly DevItem[], count: number): ReadonlyMap<string, number> {
-  const size = new Map<string, { kind: string; slices: number }>();
-  for (const { set, kind, slices } of items) size.set(set, { kind, slices: (size.get(set)?.slices ?? 0) + slices.count });
+  const size = new Map<string, { kind: string; notes: number }>();
+  for (const { set, kind, score } of items) size.set(set, { kind, notes: (size.get(set)?.notes ?? 0) + score.notes.length });
   const load = new Map<string, number[]>(KINDS.map((kind) => [kind, new Array<number>(count).fill(0)]));
   const folds = new Map<string, number>();
-  for (const [set, { kind, slices }] of [...size].sort((a, b) => b[1].slices - a[1].slices || (a[0] < b[0] ? -1 : 1))) {
+  for (const [set, { kind, notes }] of [...size].sort((a, b) => b[1].notes - a[1].notes || (a[0] < b[0] ? -1 : 1))) {
     const loads = load.get(kind) ?? [];
     const fold = loads.indexOf(Math.min(...loads));
     folds.set(set, fold);
-    loads[fold] = (loads[fold] ?? 0) + slices;
+    loads[fold] = (loads[fold] ?? 0) + notes;
   }
   return folds;
 }

@@ -1,4 +1,4 @@
-import { BINS as BIN_COUNT } from './slices';
+import { BINS as BIN_COUNT, CHANNELS } from './slices';
 import { type SpanSound } from './segments';
 import { KIND_COUNT as KINDS, TEMPLATES } from './templates';
 
@@ -19,9 +19,13 @@ const STEP = ENHARMONIC;
 const MISSING_COST = [1.4, 0.7, 0.3, 1.6] as const;
 const MISSPELLING_COST = 0.25;
 const BASS_BONUS = 0.9;
+const LOWEST_BONUS = 0.4;
 const ROOT_BONUS = 0.25;
 const NO_BASS_COST = 0.5;
 const SEVENTH_COST = 0.35;
+const STEPPING = 0.7;
+const ORNAMENTAL = 0.4;
+const CHANNEL_COUNT = CHANNELS;
 const LOWEST_RANK = -4;
 /** Room below bin 0 and above the last, so that a chord's tones need no bounds. */
 const PAD = 24;
@@ -44,12 +48,19 @@ export function inversionOfBass(root: number, kind: number, bass: number): numbe
   return -1;
 }
 
+/** Beats of a bin; what moves on by step counts less, and less again what comes by step as well. */
+function weigh(sound: SpanSound, bin: number): number {
+  const at = bin * CHANNEL_COUNT;
+  return sound.sounding[at]! + STEPPING * sound.sounding[at + 1]! + ORNAMENTAL * sound.sounding[at + 2]!;
+}
+
 /** Finds the best chords of spans; keeps its working arrays between calls. */
 export class CandidateFinder {
   /** Beats of the tone at a bin, as spelled or enharmonically; and whether it is misspelled. */
   private readonly heard = new Float64Array(BINS + 2 * PAD);
   private readonly misspelled = new Uint8Array(BINS + 2 * PAD);
   private readonly bass = new Float64Array(BINS + 2 * PAD);
+  private lowest = -1;
   private readonly isRoot = new Uint8Array(BINS + 2 * PAD);
   private readonly code: Int32Array;
   private readonly rank: Float64Array;
@@ -65,7 +76,7 @@ export class CandidateFinder {
     this.size = 0;
     this.listen(sound);
     let all = 0;
-    for (const bin of sound.bins) all += sound.total[bin]!;
+    for (const bin of sound.bins) all += weigh(sound, bin);
     const scale = 1 / Math.max(0.7, Math.sqrt(sound.beats));
     for (const bin of sound.bins) for (const root of [bin, bin - 1, bin - 4, bin + 3]) this.tryRoot(root, all, scale, sound.beats);
     this.forget(sound);
@@ -79,16 +90,17 @@ export class CandidateFinder {
 
   private listen(sound: SpanSound): void {
     const { heard, misspelled, bass } = this;
+    this.lowest = sound.lowest;
     for (const bin of sound.bins) {
       for (const other of [bin - STEP, bin + STEP]) {
         if (other < -PAD || other >= BINS + PAD || heard[other + PAD]! > 0) continue;
-        heard[other + PAD] = sound.total[bin]!;
+        heard[other + PAD] = weigh(sound, bin);
         misspelled[other + PAD] = 1;
         bass[other + PAD] = sound.bass[bin]!;
       }
     }
     for (const bin of sound.bins) {
-      heard[bin + PAD] = sound.total[bin]!;
+      heard[bin + PAD] = weigh(sound, bin);
       misspelled[bin + PAD] = 0;
       bass[bin + PAD] = sound.bass[bin]!;
     }
@@ -124,7 +136,7 @@ export class CandidateFinder {
         }
       }
       const rank = (2 * explained - all) * scale - cost;
-      if (rank > LOWEST_RANK && (this.size < this.limit || rank + BASS_BONUS + ROOT_BONUS > this.rank[this.size - 1]!)) this.tryInversions(root, kind, rank, beats);
+      if (rank > LOWEST_RANK && (this.size < this.limit || rank + BASS_BONUS + LOWEST_BONUS + ROOT_BONUS > this.rank[this.size - 1]!)) this.tryInversions(root, kind, rank, beats);
     }
   }
 
@@ -133,7 +145,8 @@ export class CandidateFinder {
       const at = root + TONES[kind * 4 + inversion]! + PAD;
       const share = this.bass[at]! / Math.max(1e-6, beats);
       if (share === 0 && inversion > 0 && this.heard[at] === 0) continue;
-      const bonus = (share > 0 ? BASS_BONUS * share : -NO_BASS_COST) + (inversion === 0 ? ROOT_BONUS : 0);
+      const isLowest = this.lowest >= 0 && (at - PAD - this.lowest) % STEP === 0;
+      const bonus = (share > 0 ? BASS_BONUS * share : -NO_BASS_COST) + (isLowest ? LOWEST_BONUS : 0) + (inversion === 0 ? ROOT_BONUS : 0);
       this.insert(((kind * BINS + root) << 2) | inversion, rank + bonus);
     }
   }

@@ -1,7 +1,10 @@
-import { type Candidate, findTone, inversionOfBass } from './candidates';
+import { type Candidate, findTone as importedFindTone, inversionOfBass as importedInversionOfBass } from './candidates';
 import { type SpanSound } from './segments';
 import { BINS, CHANNELS as CHANNEL_COUNT, type Slices } from './slices';
 import { DOMINANT_SEVENTH as V7, MAJOR as TRIAD, TEMPLATES as ALL_TEMPLATES } from './templates';
+
+const findTone = importedFindTone;
+const inversionOfBass = importedInversionOfBass;
 
 /** Imported values are bound once here: they are read in the innermost loops. */
 const CHANNELS = CHANNEL_COUNT;
@@ -71,21 +74,23 @@ export const CHORD_TERMS = [
   ['kind-french', 'a French sixth'],
   ['kind-german', 'a German sixth'],
   ['kind-augmented-seventh', 'a seventh with raised fifth'],
-  ['span', 'one more chord'],
-  ['starts-downbeat', 'it begins on the downbeat'],
-  ['starts-half-bar', 'it begins on the half-bar'],
-  ['starts-beat', 'it begins on a beat'],
-  ['starts-half-beat', 'it begins between beats'],
-  ['starts-off', 'it begins off every beat'],
-  ['starts-with-bass', 'the bass moves where it begins'],
-  ['starts-without-attack', 'nothing is struck where it begins'],
-  ['starts-with-new-notes', 'new notes come where it begins'],
-  ['starts-with-many-attacks', 'the voices move together where it begins'],
-  ['ends-same-bass', 'the bass stays where it ends'],
-  ['length-log', 'its length'],
-  ['length-under-beat', 'it is shorter than a beat'],
-  ['length-beat', 'it lasts one beat'],
-  ['length-bar', 'it fills the bar'],
+  ['lowest-agrees', 'the lowest note of the span has the tone of this inversion'],
+  ['lowest-agrees-first', 'the span begins with the tone of this inversion lowest'],
+  ['bass-agrees-last', 'the span ends on the bass of this inversion'],
+  ['complete', 'all tones of the chord sound'],
+  ['foreign-share', 'share of the sound that is foreign and stands plainly'],
+  ['dominant-seventh-share', 'the seventh of the dominant seventh lasts through the span'],
+  ['dominant-seventh-at-start', 'the seventh of the dominant seventh is there from the start'],
+  ['dominant-seventh-late', 'the seventh of the dominant seventh enters late'],
+  ['dominant-seventh-resolves', 'the seventh of the dominant seventh goes down by step at the end'],
+  ['seventh-resolves', 'the seventh goes down by step at the end'],
+  ['seventh-stays', 'the seventh stays where the chord ends'],
+  ['seventh-on-beat', 'the seventh is struck on a beat'],
+  ['seventh-moves', 'the seventh only passes through'],
+  ['minor-seventh-left-out-plain', 'a minor seventh stands plainly above a plain major triad'],
+  ['minor-seventh-left-out-early', 'a minor seventh above a plain major triad is there from the start'],
+  ['minor-seventh-left-out-on-beat', 'a minor seventh above a plain major triad is struck on a beat'],
+  ['fifth-missing-seventh', 'a seventh chord without its fifth'],
 ] as const;
 
 export const CHORD_TERM_COUNT = CHORD_TERMS.length;
@@ -93,52 +98,12 @@ type TermName = (typeof CHORD_TERMS)[number][0];
 
 const AT = Object.fromEntries(CHORD_TERMS.map(([name], i) => [name, i])) as Readonly<Record<TermName, number>>;
 
-/** Fills `row` with the terms of the span alone (its place, length and edges), the same for every chord of it. */
-export function fillSpanTerms(row: Float32Array, sound: SpanSound, slices: Slices, j: number, e: number): void {
-  const level = slices.level[j]!;
-  row[AT.span] = 1;
-  row[AT['starts-downbeat'] + level] = 1;
-  const before = j > 0 ? slices.bass[j - 1]! : -1;
-  row[AT['starts-with-bass']] = before !== slices.bass[j] ? 1 : 0;
-  row[AT['starts-without-attack']] = slices.attacks[j] === 0 ? 1 : 0;
-  row[AT['starts-with-new-notes']] = j === 0 ? 1 : shareOfNewNotes(slices, j);
-  row[AT['starts-with-many-attacks']] = slices.attacks[j]! >= 3 ? 1 : 0;
-  row[AT['ends-same-bass']] = e < slices.count && slices.bass[e] === slices.bass[e - 1] ? 1 : 0;
-  row[AT['length-log']] = Math.log2(Math.max(0.125, sound.beats));
-  row[AT['length-under-beat']] = sound.beats < 0.99 ? 1 : 0;
-  row[AT['length-beat']] = Math.abs(sound.beats - 1) < 0.01 ? 1 : 0;
-  row[AT['length-bar']] = startsBar(slices, j) && endsBar(slices, e) ? 1 : 0;
-}
-
-function startsBar(slices: Slices, j: number): boolean {
-  return j === 0 || slices.bar[j - 1] !== slices.bar[j];
-}
-
-function endsBar(slices: Slices, e: number): boolean {
-  return e === slices.count || slices.bar[e] !== slices.bar[e - 1];
-}
-
-/** Share of the pitches at the slice's start that did not sound in the slice before. */
-function shareOfNewNotes(slices: Slices, j: number): number {
-  const from = slices.first[j]!;
-  let all = 0;
-  let fresh = 0;
-  for (let p = from; p < slices.first[j + 1]!; p++) {
-    if (slices.atStart[p] === 0) continue;
-    all++;
-    let heard = false;
-    for (let q = slices.first[j - 1]!; q < from; q++) heard ||= slices.bin[q] === slices.bin[p];
-    if (!heard) fresh++;
-  }
-  return all ? fresh / all : 0;
-}
-
 /** The bins of a chord's tones as they sound, −1 for those that do not; reused between calls. */
 const tonesFound = new Int32Array(4);
 const belongs = new Uint8Array(BINS);
 
-/** Fills `row` with the terms of a chord over the gathered span. The row's span terms must be there already. */
-export function fillChordTerms(row: Float32Array, sound: SpanSound, chord: Candidate): void {
+/** Fills `row` with the terms of a chord over the gathered span. `row` holds zeros before; `e` is the slice after the span. */
+export function fillChordTerms(row: Float32Array, sound: SpanSound, slices: Slices, e: number, chord: Candidate): void {
   const template = TEMPLATES[chord.kind]!;
   row[AT['kind-major'] + chord.kind] = 1;
   for (let i = 0; i < template.tones.length; i++) fillTone(row, sound, chord.root + template.tones[i]!, i);
@@ -146,11 +111,12 @@ export function fillChordTerms(row: Float32Array, sound: SpanSound, chord: Candi
   for (let i = 0; i < 4; i++) if (tonesFound[i]! >= 0) belongs[tonesFound[i]!] = 1;
   fillForeign(row, sound, chord);
   fillBass(row, sound, chord);
-  fillSeventh(row, sound, chord);
+  fillSeventh(row, sound, slices, e, chord);
+  fillWhole(row, template.tones.length);
   row[AT['root-at-start']] = tonesFound[0]! >= 0 ? sound.atStart[tonesFound[0]!]! : 0;
   row[AT['third-at-start']] = tonesFound[1]! >= 0 ? sound.atStart[tonesFound[1]!]! : 0;
   for (let i = 0; i < 4; i++) if (tonesFound[i]! >= 0) belongs[tonesFound[i]!] = 0;
-  const log = row[AT['length-log']]!;
+  const log = Math.log2(Math.max(0.125, sound.beats));
   if (template.isSeventh) row[AT['length-seventh']] = log;
   if (chord.inversion > 0) row[AT['length-inverted']] = log;
   if (chord.inversion === 2 && template.tones.length === 3) row[AT['length-six-four']] = log;
@@ -170,7 +136,9 @@ function fillTone(row: Float32Array, sound: SpanSound, bin: number, role: number
 
 function fillForeign(row: Float32Array, sound: SpanSound, chord: Candidate): void {
   let foreign = 0;
+  let all = 0;
   for (const bin of sound.bins) {
+    all += sound.total[bin]!;
     if (belongs[bin] === 1) continue;
     foreign++;
     for (let channel = 0; channel < CHANNELS; channel++) {
@@ -184,6 +152,7 @@ function fillForeign(row: Float32Array, sound: SpanSound, chord: Candidate): voi
     fillSpecialForeign(row, sound, chord, bin);
   }
   if (foreign === 0 && sound.bins.length > 0) row[AT['all-explained']] = 1;
+  if (foreign > 0) row[AT['foreign-share']] = row[AT['foreign-plain']]! / Math.max(1e-6, all);
 }
 
 function fillSpecialForeign(row: Float32Array, sound: SpanSound, chord: Candidate, bin: number): void {
@@ -195,7 +164,12 @@ function fillSpecialForeign(row: Float32Array, sound: SpanSound, chord: Candidat
   if (interval === -1 && (third < 0 || sound.enters[third]! > sound.enters[bin]!)) row[AT['suspended-fourth']] = sound.total[bin]!;
   if (TEMPLATES[chord.kind]!.tones.length !== 3) return;
   const share = sound.total[bin]! / Math.max(1e-6, sound.beats);
-  if (chord.kind === MAJOR && interval === -2) row[AT['minor-seventh-left-out']] = share;
+  if (chord.kind === MAJOR && interval === -2) {
+    row[AT['minor-seventh-left-out']] = share;
+    row[AT['minor-seventh-left-out-plain']] = sound.sounding[bin * CHANNELS]! / Math.max(1e-6, sound.beats);
+    row[AT['minor-seventh-left-out-early']] = sound.atStart[bin]!;
+    row[AT['minor-seventh-left-out-on-beat']] = sound.attacks[bin]! > 0 ? 1 : 0;
+  }
   else if (interval === -2 || interval === 5 || interval === -9) row[AT['seventh-left-out']] = share;
 }
 
@@ -214,16 +188,49 @@ function fillBass(row: Float32Array, sound: SpanSound, chord: Candidate): void {
   row[AT['bass-other-tone']] = other;
   row[AT['bass-foreign']] = Math.max(0, 1 - own - other);
   row[AT['bass-never']] = own === 0 ? 1 : 0;
+  row[AT['lowest-agrees']] = inversionOfBass(chord.root, chord.kind, sound.lowest) === chord.inversion ? 1 : 0;
+  row[AT['lowest-agrees-first']] = inversionOfBass(chord.root, chord.kind, sound.lowestAtStart) === chord.inversion ? 1 : 0;
+  row[AT['bass-agrees-last']] = inversionOfBass(chord.root, chord.kind, sound.lastBass) === chord.inversion ? 1 : 0;
   row[AT['bass-agrees-first']] = inversionOfBass(chord.root, chord.kind, sound.firstBass) === chord.inversion ? 1 : 0;
 }
 
-function fillSeventh(row: Float32Array, sound: SpanSound, chord: Candidate): void {
-  if (!TEMPLATES[chord.kind]!.isSeventh || tonesFound[3]! < 0) return;
+function fillSeventh(row: Float32Array, sound: SpanSound, slices: Slices, e: number, chord: Candidate): void {
+  if (!TEMPLATES[chord.kind]!.isSeventh) return;
+  if (tonesFound[2]! < 0) row[AT['fifth-missing-seventh']] = 1;
+  if (tonesFound[3]! < 0) return;
   const bin = tonesFound[3]!;
-  const beats = Math.max(1e-6, sound.beats);
-  row[AT['seventh-share']] = sound.total[bin]! / beats;
+  const share = sound.total[bin]! / Math.max(1e-6, sound.beats);
+  const isLate = sound.enters[bin]! >= sound.beats / 2 - 1e-6 ? 1 : 0;
+  row[AT['seventh-share']] = share;
   row[AT['seventh-at-start']] = sound.atStart[bin]!;
-  row[AT['seventh-late']] = sound.enters[bin]! >= sound.beats / 2 - 1e-6 ? 1 : 0;
+  row[AT['seventh-late']] = isLate;
+  row[AT['seventh-on-beat']] = sound.attacks[bin]! > 0 ? 1 : 0;
+  row[AT['seventh-moves']] = sound.sounding[bin * CHANNELS + 2]! / Math.max(1e-6, sound.total[bin]!);
+  const resolves = goesDown(slices, e, bin) ? 1 : 0;
+  row[AT['seventh-resolves']] = resolves;
+  row[AT['seventh-stays']] = startsWith(slices, e, bin) ? 1 : 0;
+  if (chord.kind !== DOMINANT_SEVENTH) return;
+  row[AT['dominant-seventh-share']] = share;
+  row[AT['dominant-seventh-at-start']] = sound.atStart[bin]!;
+  row[AT['dominant-seventh-late']] = isLate;
+  row[AT['dominant-seventh-resolves']] = resolves;
+}
+
+/** The note a half or whole step below sounds where the next span begins, and the note itself does not. */
+function goesDown(slices: Slices, e: number, bin: number): boolean {
+  return !startsWith(slices, e, bin) && (startsWith(slices, e, bin + 5) || startsWith(slices, e, bin - 2));
+}
+
+function startsWith(slices: Slices, e: number, bin: number): boolean {
+  if (e >= slices.count) return false;
+  for (let p = slices.first[e]!; p < slices.first[e + 1]!; p++) if (slices.bin[p] === bin && slices.atStart[p] === 1) return true;
+  return false;
+}
+
+function fillWhole(row: Float32Array, tones: number): void {
+  let heard = 0;
+  for (let i = 0; i < tones; i++) if (tonesFound[i]! >= 0) heard++;
+  if (heard === tones) row[AT.complete] = 1;
 }
 
 /** The weights before any learning: set by hand, in the order of magnitude that a teacher would give them. */
@@ -236,10 +243,8 @@ export const HAND_CHORD_WEIGHTS: Readonly<Partial<Record<TermName, number>>> = {
   'foreign-on-beats': -0.05,
   'ninth-over-dominant': 0.4, 'suspended-fourth': 0.3, misspelled: -0.3,
   'root-missing': -1.2, 'third-missing': -0.7, 'fifth-missing': -0.3, 'seventh-missing': -1.3,
-  'all-explained': 0.4, 'bass-agrees': 0.83, 'bass-agrees-first': 0.3, 'bass-foreign': -0.3, 'bass-never': -0.4,
+  'all-explained': 0.4, 'bass-agrees': 0.83, 'bass-agrees-first': 0.2, 'lowest-agrees': 0.3, 'bass-foreign': -0.3, 'bass-never': -0.4,
   'seventh-late': -0.1, 'minor-seventh-left-out': -0.1,
   'foreign-at-start': -0.1, 'foreign-at-end': 0,
   'length-seventh': -0.14, 'length-inverted': -0.14,
-  span: -1.1, 'starts-downbeat': 0.5, 'starts-half-bar': 0.07, 'starts-beat': 0.05, 'starts-half-beat': -0.9, 'starts-off': -1.5,
-  'starts-with-bass': 0.2, 'starts-without-attack': -0.5, 'starts-with-new-notes': 0.2,
 };

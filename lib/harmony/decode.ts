@@ -1,5 +1,8 @@
-import { CHORD_SPAN, type Lattice, keyOfState } from './lattice';
+import { CHORD_SPAN, type Lattice, keyOfState as importedKeyOfState } from './lattice';
 import { IMPOSSIBLE, type Transitions } from './transitions';
+
+/** Imported values are bound once here: they are read in the innermost loops. */
+const keyOfState = importedKeyOfState;
 
 export interface SearchOptions {
   /** Arrivals considered at a boundary; how far below the best one they may lie; how many from other keys. */

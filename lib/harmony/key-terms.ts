@@ -1,4 +1,9 @@
-import { BINS, BIN_SHIFT, type Slices } from './slices';
+import { type KeyEvents, gatherKeyEvents } from './key-events';
+import { BINS as IMPORTED_BINS, BIN_SHIFT as IMPORTED_BIN_SHIFT, type Slices } from './slices';
+
+/** Imported values are bound once here: they are read in the innermost loops. */
+const BIN_SHIFT = IMPORTED_BIN_SHIFT;
+const BINS = IMPORTED_BINS;
 
 /**
  * A key's number: (tonic + KEY_SHIFT) · 2 + mode (0 major, 1 minor), the tonic on the line of fifths. Keys are compared with
@@ -50,6 +55,10 @@ export const KEY_FACTS = [
   ['home-dominant', 'it is the dominant of the home key'],
   ['home-subdominant', 'it is the subdominant of the home key'],
   ['minor', 'it is a minor key'],
+  ['close-ahead', 'a cadence in this key is coming'],
+  ['close-behind', 'a cadence in this key has just been heard'],
+  ['resolution-ahead', 'its leading tone and fourth degree are about to resolve'],
+  ['resolution-behind', 'its leading tone and fourth degree have just resolved'],
 ] as const;
 
 export const KEY_FACT_COUNT = KEY_FACTS.length;
@@ -58,7 +67,7 @@ export const KEY_TERM_COUNT = KEY_PROFILE_COUNT + KEY_FACT_COUNT;
 
 /** Weights before learning: profiles × log-frequency, by window in the order of KEY_WINDOWS; and the facts. */
 export const HAND_WINDOW_WEIGHTS = [0.13, 0.35, 0.12, 0.1] as const;
-export const HAND_FACT_WEIGHTS = [-0.02, -0.02, 0.14, -0.03, -0.05, -0.09, 0.21, 0, 0, 0, 0, 0] as const;
+export const HAND_FACT_WEIGHTS = [-0.02, -0.02, 0.14, -0.03, -0.05, -0.09, 0.21, 0, 0, 0, 0, 0, 0.1, 0.1, 0.1, 0.1] as const;
 
 /** Where a window's profile of a mode begins among the key terms. */
 export function profileAt(window: number, mode: number): number {
@@ -84,6 +93,10 @@ export interface KeyEvidence {
   /** Last and next place (bin) of each letter around a slice, −1 when none: `[slice · 7 + letter]`. */
   readonly lastOfLetter: Int16Array;
   readonly nextOfLetter: Int16Array;
+  readonly events: KeyEvents;
+  /** Share of the sound that is not in the written signature, and the excerpt's length in bars. */
+  readonly accidentals: number;
+  readonly bars: number;
   readonly home: HomeEvidence;
 }
 
@@ -102,7 +115,28 @@ export function gatherKeyEvidence(slices: Slices, barTicks: Float64Array, home: 
       fillShare(share, (i * KEY_WINDOWS.length + w) * bins.length, sums, bins.length, Math.min(a, i), b);
     }
   });
-  return { bins, share, lastOfLetter: findLetters(slices, 1), nextOfLetter: findLetters(slices, -1), home };
+  return {
+    bins,
+    share,
+    lastOfLetter: findLetters(slices, 1),
+    nextOfLetter: findLetters(slices, -1),
+    events: gatherKeyEvents(slices, bins, barTicks),
+    accidentals: shareOfAccidentals(slices, home.signature),
+    bars: slices.count > 0 ? slices.bar[slices.count - 1]! - slices.bar[0]! + 1 : 0,
+    home,
+  };
+}
+
+function shareOfAccidentals(slices: Slices, signature: Int8Array): number {
+  let all = 0;
+  let foreign = 0;
+  for (let i = 0; i < slices.count; i++) {
+    for (let p = slices.first[i]!; p < slices.first[i + 1]!; p++) {
+      all += slices.sounding[p]!;
+      if (!isInScale(0, slices.bin[p]! - BIN_SHIFT - signature[i]!)) foreign += slices.sounding[p]!;
+    }
+  }
+  return all > 0 ? foreign / all : 0;
 }
 
 function findBins(slices: Slices): Int32Array {
@@ -164,6 +198,17 @@ export function fillKeyFacts(row: Float32Array, evidence: KeyEvidence, i: number
   const relation = relationToHome(key, evidence.home.home);
   if (relation >= 0) row[6 + relation] = 1;
   row[11] = mode;
+  fillEvents(row, evidence.events, i, tonic, mode);
+}
+
+function fillEvents(row: Float32Array, events: KeyEvents, i: number, tonic: number, mode: number): void {
+  const place = events.place[tonic] ?? -1;
+  if (place < 0) return;
+  const slot = (i * events.places + place) * 2 + mode;
+  row[12] = events.closeAhead[slot]!;
+  row[13] = events.closeBehind[slot]!;
+  row[14] = events.resolutionAhead[slot]!;
+  row[15] = events.resolutionBehind[slot]!;
 }
 
 function countForeignLetters(letters: Int16Array, i: number, tonic: number, mode: number): number {

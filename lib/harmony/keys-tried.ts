@@ -1,20 +1,32 @@
-import { BIN_SHIFT } from './slices';
+import { BIN_SHIFT as IMPORTED_BIN_SHIFT } from './slices';
 import {
   KEY_COUNT,
-  KEY_FACT_COUNT,
-  KEY_PROFILE_COUNT,
-  KEY_WINDOWS,
+  KEY_FACT_COUNT as IMPORTED_KEY_FACT_COUNT,
+  KEY_PROFILE_COUNT as IMPORTED_KEY_PROFILE_COUNT,
+  KEY_WINDOWS as IMPORTED_KEY_WINDOWS,
   type KeyEvidence,
-  fillKeyFacts,
+  fillKeyFacts as importedFillKeyFacts,
   keyNumber,
-  modeOf,
-  placeInProfile,
-  profileAt,
+  modeOf as importedModeOf,
+  placeInProfile as importedPlaceInProfile,
+  profileAt as importedProfileAt,
   signatureOfKey,
-  tonicOf,
+  tonicOf as importedTonicOf,
 } from './key-terms';
 import { type Slices } from './slices';
-import { AT, type Weights } from './weights';
+import { AT as IMPORTED_AT, type Weights } from './weights';
+
+/** Imported values are bound once here: they are read in the innermost loops. */
+const KEY_FACT_COUNT = IMPORTED_KEY_FACT_COUNT;
+const KEY_PROFILE_COUNT = IMPORTED_KEY_PROFILE_COUNT;
+const KEY_WINDOWS = IMPORTED_KEY_WINDOWS;
+const fillKeyFacts = importedFillKeyFacts;
+const modeOf = importedModeOf;
+const placeInProfile = importedPlaceInProfile;
+const profileAt = importedProfileAt;
+const tonicOf = importedTonicOf;
+const AT = IMPORTED_AT;
+const BIN_SHIFT = IMPORTED_BIN_SHIFT;
 
 /**
  * The keys that the search tries, per bar (slices of one bar share them), and what every slice says for each:
@@ -29,6 +41,9 @@ export interface KeysTried {
 
 export type WantedKeys = (i: number) => readonly number[];
 
+/** How many of the keys may be there only because their tonic triad stands in the bar. */
+const LOCAL_TONICS = 4;
+
 /** Chooses the `count` most likely keys for each bar by the key terms at its slices, and scores them slice by slice. */
 export function chooseKeys(slices: Slices, evidence: KeyEvidence, choosing: Weights, count: number, wanted?: WantedKeys): Int16Array {
   const all = possibleKeys(evidence);
@@ -41,10 +56,32 @@ export function chooseKeys(slices: Slices, evidence: KeyEvidence, choosing: Weig
     const must = new Set<number>();
     for (let i = from; i < to; i++) for (const key of wanted?.(i) ?? []) must.add(key);
     if (evidence.home.home >= 0) must.add(evidence.home.home);
-    const best = [...new Set([...must, ...ranked.map((entry) => entry.key)])].slice(0, count);
+    const likely = ranked.map((entry) => entry.key);
+    const tonics = findTonics(slices, from, to).slice(0, LOCAL_TONICS);
+    const best = [...new Set([...must, ...likely.slice(0, count - LOCAL_TONICS), ...tonics, ...likely])].slice(0, count);
     for (let i = from; i < to; i++) chosen.set(best, i * count);
   }
   return chosen;
+}
+
+/** Keys whose tonic triad stands over its root in the bar, longest first: a key may be left after its first chord. */
+function findTonics(slices: Slices, from: number, to: number): readonly number[] {
+  const beats = new Map<number, number>();
+  for (let i = from; i < to; i++) {
+    const bass = slices.bass[i]!;
+    if (bass < 0 || !soundsIn(slices, i, bass)) continue;
+    for (const mode of [0, 1]) {
+      if (!soundsIn(slices, i, bass + (mode === 0 ? 4 : -3))) continue;
+      const key = keyNumber(bass - BIN_SHIFT, mode);
+      beats.set(key, (beats.get(key) ?? 0) + slices.beats[i]!);
+    }
+  }
+  return [...beats].sort((a, b) => b[1] - a[1] || a[0] - b[0]).map(([key]) => key);
+}
+
+function soundsIn(slices: Slices, i: number, bin: number): boolean {
+  for (let p = slices.first[i]!; p < slices.first[i + 1]!; p++) if (slices.bin[p] === bin) return true;
+  return false;
 }
 
 function rankInBar(evidence: KeyEvidence, weights: Weights, from: number, to: number, key: number, facts: Float32Array): number {

@@ -1,12 +1,22 @@
-import { BIN_SHIFT } from './slices';
+import { BIN_SHIFT as IMPORTED_BIN_SHIFT } from './slices';
 import { CHORD_TERM_COUNT } from './chord-terms';
 import { type KeysTried } from './keys-tried';
-import { KEY_COUNT, modeOf, tonicOf } from './key-terms';
+import { KEY_COUNT as IMPORTED_KEY_COUNT, modeOf as importedModeOf, tonicOf as importedTonicOf } from './key-terms';
 import { type Material } from './material';
 import { NodeTerms } from './node-terms';
+import { SPAN_TERM_COUNT } from './span-terms';
 import { TEMPLATES } from './templates';
-import { LABEL_COUNT, findLabels } from './vocabulary';
-import { AT, type Weights } from './weights';
+import { LABEL_COUNT as IMPORTED_LABEL_COUNT, findLabels as importedFindLabels } from './vocabulary';
+import { AT as IMPORTED_AT, type Weights } from './weights';
+
+/** Imported values are bound once here: they are read in the innermost loops. */
+const BIN_SHIFT = IMPORTED_BIN_SHIFT;
+const modeOf = importedModeOf;
+const tonicOf = importedTonicOf;
+const findLabels = importedFindLabels;
+const LABEL_COUNT = IMPORTED_LABEL_COUNT;
+const AT = IMPORTED_AT;
+const KEY_COUNT = IMPORTED_KEY_COUNT;
 
 /** A label in an inversion, as one number; a state is a key and such a chord. */
 export const CHORD_SPAN = LABEL_COUNT * 4;
@@ -79,6 +89,7 @@ class LatticeBuilder {
   private readonly chordScore: Float64Array;
   private readonly sixFourKind = TEMPLATES.map((template) => template.tones.length === 3 && !template.isAugmentedSixth);
   private order: number[] = [];
+  private sorting = new Float64Array(256);
 
   constructor(
     private readonly material: Material,
@@ -94,6 +105,7 @@ class LatticeBuilder {
   addSegment(s: number): void {
     const { segments, candidateFrom } = this.material;
     this.sumKeys(segments.start[s]!, segments.end[s]!);
+    this.nodeTerms.enterSegment(s);
     const from = this.size;
     let best = -Infinity;
     const chords = this.bestCandidates(candidateFrom[s]!, candidateFrom[s + 1]!);
@@ -123,10 +135,9 @@ class LatticeBuilder {
 
   /** Adds the candidate's nodes that may survive; a node's quick score bounds it, for notes outside a scale only cost. */
   private addCandidate(s: number, c: number, bestSoFar: number): number {
-    const { root, kind, inversion, segments, slices } = this.material;
+    const { root, kind, inversion, segments } = this.material;
     const { nodeTerms, chordScore, options } = this;
     const j = segments.start[s]!;
-    const level = slices.level[j]!;
     const sixFour = inversion[c] === 2 && this.sixFourKind[kind[c]!]!;
     let best = bestSoFar;
     for (let k = 0; k < this.keys.count; k++) {
@@ -135,7 +146,7 @@ class LatticeBuilder {
       const labels = findLabels(modeOf(key), root[c]! - BIN_SHIFT - tonicOf(key), kind[c]!, sixFour);
       for (let l = 0; l < labels.length; l++) {
         const label = labels[l]!;
-        let score = chordScore[c]! + this.keySums[k]! + nodeTerms.quickScore(level, label, inversion[c]!);
+        let score = chordScore[c]! + this.keySums[k]! + nodeTerms.quickScore(label, inversion[c]!);
         if (score < best - options.nodeMargin && options.keep?.(s, stateOf(key, label, inversion[c]!)) !== 'must') continue;
         score += nodeTerms.scaleScore(s, c, key, label) + nodeTerms.edgeScore(s, key, label);
         if (score > best) best = score;
@@ -187,8 +198,9 @@ class LatticeBuilder {
 
   private strongest(nodes: readonly number[], count: number, s: number): readonly number[] {
     const { keep } = this.options;
-    const scores = Float64Array.from(nodes, (n) => this.score[n]!).sort();
-    const threshold = scores[scores.length - count]!;
+    if (this.sorting.length < nodes.length) this.sorting = new Float64Array(2 * nodes.length);
+    for (let i = 0; i < nodes.length; i++) this.sorting[i] = this.score[nodes[i]!]!;
+    const threshold = this.sorting.subarray(0, nodes.length).sort()[nodes.length - count]!;
     return nodes.filter((n) => this.score[n]! >= threshold || keep?.(s, this.state[n]!) === 'must');
   }
 
@@ -226,17 +238,23 @@ class LatticeBuilder {
   }
 }
 
+/** The learned score of every candidate, its span's terms included. */
 function scoreChords(material: Material, weights: Weights): Float64Array {
-  const { terms } = material;
-  const size = CHORD_TERM_COUNT;
-  const chord = weights.values.slice(AT.chord, AT.chord + size);
+  const { terms, spanTerms, candidateFrom, segments } = material;
+  const chord = weights.values.slice(AT.chord, AT.chord + CHORD_TERM_COUNT);
+  const span = weights.values.slice(AT.span, AT.span + SPAN_TERM_COUNT);
   const scores = new Float64Array(material.root.length);
-  for (let c = 0, at = 0; c < scores.length; c++, at += size) {
-    let sum = 0;
-    for (let t = 0; t < size; t++) sum += terms[at + t]! * chord[t]!;
-    scores[c] = sum;
+  for (let s = 0; s < segments.count; s++) {
+    const ofSpan = dot(spanTerms, s * SPAN_TERM_COUNT, span);
+    for (let c = candidateFrom[s]!; c < candidateFrom[s + 1]!; c++) scores[c] = ofSpan + dot(terms, c * CHORD_TERM_COUNT, chord);
   }
   return scores;
+}
+
+function dot(terms: Float32Array, at: number, weights: Float64Array): number {
+  let sum = 0;
+  for (let t = 0; t < weights.length; t++) sum += terms[at + t]! * weights[t]!;
+  return sum;
 }
 
 function sortByEnd(segment: Int32Array, end: Int32Array, boundaries: number): Int32Array {

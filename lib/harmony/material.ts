@@ -1,8 +1,9 @@
 import { type Candidate, CandidateFinder } from './candidates';
-import { CHORD_TERM_COUNT as TERM_COUNT, fillChordTerms, fillSpanTerms } from './chord-terms';
+import { CHORD_TERM_COUNT as TERM_COUNT, fillChordTerms } from './chord-terms';
 import { type KeyEvidence } from './key-terms';
 import { type Segments, SpanSound, enumerateSegments } from './segments';
 import { CHANNELS as CHANNEL_COUNT, type Slices } from './slices';
+import { SPAN_TERM_COUNT, fillSpanTerms } from './span-terms';
 
 const CHORD_TERM_COUNT = TERM_COUNT;
 const CHANNELS = CHANNEL_COUNT;
@@ -10,7 +11,7 @@ const CHANNELS = CHANNEL_COUNT;
 /**
  * All that the search weighs in an excerpt, before any weight: spans with their candidate chords and terms. Candidates of
  * segment s are `candidateFrom[s]` to `candidateFrom[s + 1]`; candidate c's terms are the row of CHORD_TERM_COUNT from
- * `c · CHORD_TERM_COUNT`. Sounds of segment s stand from `soundFrom[s]`: bin, plain beats, beats of moving notes.
+ * `c · CHORD_TERM_COUNT`, segment s's own terms that of SPAN_TERM_COUNT from `s · SPAN_TERM_COUNT`. Sounds of segment s stand from `soundFrom[s]`: bin, plain beats, beats of moving notes.
  */
 export interface Material {
   readonly slices: Slices;
@@ -21,6 +22,7 @@ export interface Material {
   readonly kind: Uint8Array;
   readonly inversion: Uint8Array;
   readonly terms: Float32Array;
+  readonly spanTerms: Float32Array;
   readonly soundFrom: Int32Array;
   readonly soundBin: Uint8Array;
   readonly soundPlain: Float32Array;
@@ -61,26 +63,25 @@ class Gathering {
   private readonly soundMoving: number[] = [];
   private terms = new Float32Array(CHORD_TERM_COUNT * 4096);
   private segment = 0;
-  private readonly spanRow = new Float32Array(CHORD_TERM_COUNT);
+  private readonly spanTerms: Float32Array;
 
   private readonly finder: CandidateFinder;
 
   constructor(segments: number, private readonly options: MaterialOptions) {
     this.finder = new CandidateFinder(options.candidates);
     this.candidateFrom = new Int32Array(segments + 1);
+    this.spanTerms = new Float32Array(segments * SPAN_TERM_COUNT);
     this.soundFrom = new Int32Array(segments + 1);
   }
 
   addSegment(sound: SpanSound, slices: Slices, j: number, e: number): void {
     const chords = withWanted(this.finder.find(sound), this.options.wanted?.(j, e) ?? []);
-    this.spanRow.fill(0);
-    fillSpanTerms(this.spanRow, sound, slices, j, e);
+    const place = this.segment * SPAN_TERM_COUNT;
+    fillSpanTerms(this.spanTerms.subarray(place, place + SPAN_TERM_COUNT), sound, slices, j, e);
     this.reserve(this.chords.length + chords.length);
     for (const chord of chords) {
       const at = this.chords.length * CHORD_TERM_COUNT;
-      const row = this.terms.subarray(at, at + CHORD_TERM_COUNT);
-      row.set(this.spanRow);
-      fillChordTerms(row, sound, chord);
+      fillChordTerms(this.terms.subarray(at, at + CHORD_TERM_COUNT), sound, slices, e, chord);
       this.chords.push(chord);
     }
     this.addSound(sound);
@@ -111,6 +112,7 @@ class Gathering {
       kind: Uint8Array.from(this.chords, (chord) => chord.kind),
       inversion: Uint8Array.from(this.chords, (chord) => chord.inversion),
       terms: this.terms.slice(0, this.chords.length * CHORD_TERM_COUNT),
+      spanTerms: this.spanTerms,
       soundFrom: this.soundFrom,
       soundBin: Uint8Array.from(this.soundBin),
       soundPlain: Float32Array.from(this.soundPlain),

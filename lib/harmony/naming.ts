@@ -2,16 +2,61 @@ import { type Numeral, type Special } from '../theory/numeral';
 import { inversionOfState, keyOfState, labelOfState } from './lattice';
 import { type ChosenSpan } from './read-out';
 import { type Slices } from './slices';
-import { DOMINANT_SEVENTH, MAJOR } from './templates';
+import { DIMINISHED_SEVENTH, DOMINANT_SEVENTH, MAJOR } from './templates';
 import { LABELS, numeralOf } from './vocabulary';
 
-/** The numeral of a chosen span, with what only its surroundings tell: which kind of six-four it is. */
+/** The numeral of a chosen span, with what only its surroundings tell: which kind of six-four it is, a common-tone °7. */
 export function nameInContext(spans: readonly ChosenSpan[], i: number, slices: Slices): Numeral {
   const { state } = spans[i]!;
   const label = LABELS[labelOfState(state)]!;
+  if (isRespelledSixth(spans, i)) return germanSixth(inversionOfState(state));
   const numeral = numeralOf(label, inversionOfState(state));
-  if (!label.sixFour || numeral.special) return numeral;
-  return { ...numeral, special: findSixFour(spans, i, slices) };
+  if (numeral.special) return numeral;
+  if (isCommonTone(spans, i)) return { ...numeral, special: 'common-tone' };
+  return label.sixFour ? { ...numeral, special: findSixFour(spans, i, slices) } : numeral;
+}
+
+/** Root of the dominant seventh that sounds like a German sixth: the flat sixth, in fifths from the tonic. */
+const FLAT_SIXTH = -4;
+
+/** The flat sixth of the chord is the third of the German sixth: what was tone i becomes tone i + 1. */
+function germanSixth(inversion: number): Numeral {
+  return {
+    degree: { step: 4, alter: 1 },
+    quality: 'augmented-sixth-german',
+    inversion: ((inversion + 1) % 4) as Numeral['inversion'],
+    applied: [],
+    special: null,
+    added: [],
+  };
+}
+
+/**
+ * A dominant seventh on the flat sixth that goes to the dominant or the six-four above it: a German sixth whose raised
+ * fourth is written as a lowered fifth. Source: Integrated Musicianship: Theory, ch. 20a.
+ */
+function isRespelledSixth(spans: readonly ChosenSpan[], i: number): boolean {
+  const { state } = spans[i]!;
+  const label = LABELS[labelOfState(state)]!;
+  const next = spans[i + 1];
+  if (label.kind !== DOMINANT_SEVENTH || label.root !== FLAT_SIXTH || !next || keyOfState(next.state) !== keyOfState(state)) return false;
+  const goal = LABELS[labelOfState(next.state)]!;
+  if (goal.target) return false;
+  return (goal.root === 0 && goal.sixFour) || (goal.root === 1 && (goal.kind === MAJOR || goal.kind === DOMINANT_SEVENTH));
+}
+
+/**
+ * A °7 on the raised second that turns around the tonic: it shares the tonic, the others move by step.
+ * Source: Integrated Musicianship: Theory, ch. 18b.
+ */
+function isCommonTone(spans: readonly ChosenSpan[], i: number): boolean {
+  const label = LABELS[labelOfState(spans[i]!.state)]!;
+  if (label.kind !== DIMINISHED_SEVENTH || label.target || label.step !== 2 || label.alter !== 1) return false;
+  return [spans[i - 1], spans[i + 1]].some((other) => {
+    if (!other || keyOfState(other.state) !== keyOfState(spans[i]!.state)) return false;
+    const beside = LABELS[labelOfState(other.state)]!;
+    return beside.root === 0 && !beside.target;
+  });
 }
 
 /**

@@ -1,18 +1,25 @@
-import { inversionOfBass } from './candidates';
-import { tonicOf } from './key-terms';
+import { inversionOfBass as importedInversionOfBass } from './candidates';
+import { tonicOf as importedTonicOf } from './key-terms';
 import { type Material } from './material';
 import { BINS, BIN_SHIFT as SHIFT } from './slices';
+import { LENGTH_BAR, LENGTH_LOG, LENGTH_UNDER_BEAT, SPAN_TERM_COUNT as IMPORTED_SPAN_TERM_COUNT } from './span-terms';
 import { TEMPLATES } from './templates';
 import {
   LABELS,
   LABEL_CLASS as CLASSES,
   LABEL_CLASSES,
-  LABEL_COUNT,
+  LABEL_COUNT as IMPORTED_LABEL_COUNT,
   LABEL_KIND,
   LABEL_TONICISED as TONICISED,
   LABEL_TONICISED_MODE as TONICISED_MODE,
 } from './vocabulary';
 import { AT as BLOCKS, type Weights, inversionSlot } from './weights';
+
+/** Imported values are bound once here: they are read in the innermost loops. */
+const tonicOf = importedTonicOf;
+const inversionOfBass = importedInversionOfBass;
+const LABEL_COUNT = IMPORTED_LABEL_COUNT;
+const SPAN_TERM_COUNT = IMPORTED_SPAN_TERM_COUNT;
 
 const AT = BLOCKS;
 const BIN_SHIFT = SHIFT;
@@ -42,14 +49,30 @@ export class NodeTerms {
   private readonly tones = TEMPLATES.map((template) => template.tones);
   private plain = 0;
   private moving = 0;
+  /** What the current segment's place and length say for each class. */
+  private readonly ofClass = new Float64Array(LABEL_CLASSES.length);
 
   constructor(
     private readonly material: Material,
     private readonly weights: Weights,
   ) {}
 
+  /** Sums what a segment's place and length say; before quickScore is asked about it. */
+  enterSegment(s: number): void {
+    const { values } = this.weights;
+    const { slices, segments, spanTerms } = this.material;
+    const row = s * SPAN_TERM_COUNT;
+    const level = slices.level[segments.start[s]!]!;
+    const log = spanTerms[row + LENGTH_LOG]!;
+    const isShort = spanTerms[row + LENGTH_UNDER_BEAT]!;
+    const isBar = spanTerms[row + LENGTH_BAR]!;
+    for (let cls = 0, at = AT.classLength; cls < this.ofClass.length; cls++, at += 3) {
+      this.ofClass[cls] = values[AT.classLevel + cls * 5 + level]! + values[at]! * log + values[at + 1]! * isShort + values[at + 2]! * isBar;
+    }
+  }
+
   /** The part of a label's score that is quick to know; the rest (scaleScore) is at most that of a pedal above 0. */
-  quickScore(level: number, label: number, inversion: number): number {
+  quickScore(label: number, inversion: number): number {
     const slot = label * 4 + inversion;
     if (Number.isNaN(this.base[slot]!)) {
       let sum = 0;
@@ -58,7 +81,7 @@ export class NodeTerms {
       });
       this.base[slot] = sum;
     }
-    return this.base[slot]! + this.weights.values[AT.classLevel + LABEL_CLASS[label]! * 5 + level]!;
+    return this.base[slot]! + this.ofClass[LABEL_CLASS[label]!]!;
   }
 
   edgeScore(s: number, key: number, label: number): number {
@@ -80,7 +103,7 @@ export class NodeTerms {
 
   readLabel(s: number, c: number, key: number, label: number, sink: TermSink): void {
     this.readBase(label, this.material.inversion[c]!, sink);
-    sink(AT.classLevel + LABEL_CLASS[label]! * 5 + this.material.slices.level[this.material.segments.start[s]!]!, 1);
+    this.readClass(s, LABEL_CLASS[label]!, sink);
     this.readEdges(s, key, label, sink);
     this.measureScale(s, c, key, label);
     if (this.plain > 0) sink(AT.label + 2, this.plain);
@@ -104,9 +127,20 @@ export class NodeTerms {
     sink(AT.label, tables.label[label]!);
     sink(AT.label + 1, tables.inversion[label * 4 + inversion]!);
     sink(AT.perLabel + label, 1);
+    sink(AT.labelInversion + label * 4 + inversion, 1);
     sink(AT.inversion + inversionSlot(label, this.tones[LABEL_KIND[label]!]!.length > 3, inversion), 1);
     if (cls >= FIRST_APPLIED && cls <= LAST_APPLIED) sink(AT.label + 4, 1);
     else if (cls >= FIRST_CHROMATIC) sink(AT.label + 5, 1);
+  }
+
+  private readClass(s: number, cls: number, sink: TermSink): void {
+    const { slices, segments, spanTerms } = this.material;
+    const row = s * SPAN_TERM_COUNT;
+    const at = AT.classLength + cls * 3;
+    sink(AT.classLevel + cls * 5 + slices.level[segments.start[s]!]!, 1);
+    sink(at, spanTerms[row + LENGTH_LOG]!);
+    if (spanTerms[row + LENGTH_UNDER_BEAT] === 1) sink(at + 1, 1);
+    if (spanTerms[row + LENGTH_BAR] === 1) sink(at + 2, 1);
   }
 
   private readEdges(s: number, key: number, label: number, sink: TermSink): void {

@@ -4,6 +4,8 @@ const CHANNELS = CHANNEL_COUNT;
 
 /** Slices in the longest candidate span; labels that last longer go on with "the same again" at a barline. */
 export const LONGEST_SEGMENT = 36;
+/** The finest metrical level (a beat) at which a change inside a span counts as passed over. */
+const LEAST_LEVEL = 2;
 
 /**
  * Candidate spans: segment s covers the slices `start[s]` to `end[s]` (exclusive), always within one bar. Sorted by start,
@@ -50,6 +52,14 @@ export class SpanSound {
   readonly bins: number[] = [];
   firstBass = -1;
   lastBass = -1;
+  /** Bin and height of the lowest note heard, and the bin of the lowest at the span's start. */
+  lowest = -1;
+  lowestAtStart = -1;
+  private height = Infinity;
+  /** The largest changes of sound, and the moves of the bass on beats, after the first slice. */
+  hiddenChange = 0;
+  hiddenWideChange = 0;
+  hiddenBassMoves = 0;
   beats = 0;
   size = 0;
 
@@ -61,6 +71,12 @@ export class SpanSound {
     this.size = 0;
     this.firstBass = -1;
     this.lastBass = -1;
+    this.lowest = -1;
+    this.lowestAtStart = -1;
+    this.height = Infinity;
+    this.hiddenChange = 0;
+    this.hiddenWideChange = 0;
+    this.hiddenBassMoves = 0;
   }
 
   private clearBin(bin: number): void {
@@ -82,8 +98,20 @@ export class SpanSound {
       if (this.size === 0) this.firstBass = bass;
       this.lastBass = bass;
     }
+    if (this.size === 0) this.lowestAtStart = slices.lowestAtStart[i]!;
+    if (slices.lowestMidi[i]! < this.height) {
+      this.height = slices.lowestMidi[i]!;
+      this.lowest = slices.lowest[i]!;
+    }
+    if (this.size > 0 && slices.level[i]! <= LEAST_LEVEL) this.hideChange(slices, i);
     this.beats += beats;
     this.size++;
+  }
+
+  private hideChange({ change, bass }: Slices, i: number): void {
+    if (change.near[i]! > this.hiddenChange) this.hiddenChange = change.near[i]!;
+    if (change.wide[i]! > this.hiddenWideChange) this.hiddenWideChange = change.wide[i]!;
+    if (bass[i] !== bass[i - 1]) this.hiddenBassMoves++;
   }
 
   private addPitch(slices: Slices, p: number): void {

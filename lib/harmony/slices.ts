@@ -3,6 +3,7 @@ import { type Bar, type Note, type Score } from '../score/score';
 import { type Sonority } from '../score/sonority';
 import { diatonicOf, midiOf } from '../theory/pitch';
 import { holdBass } from './bass';
+import { type Change, type Sounds, measureChange } from './change';
 
 /** Pitch bins: place on the line of fifths + BIN_SHIFT, 0 … BINS − 1. Wide enough for B♯ major and its applied chords. */
 export const BIN_SHIFT = 44;
@@ -27,6 +28,10 @@ export interface Slices {
   readonly bar: Int32Array;
   readonly bass: Int16Array;
   readonly bassMidi: Int16Array;
+  /** Lowest sounding note of the slice, whatever the held bass: its bin and height; and the bin of the lowest at the slice's start. */
+  readonly lowest: Int16Array;
+  readonly lowestMidi: Int16Array;
+  readonly lowestAtStart: Int16Array;
   readonly attacks: Uint8Array;
   readonly first: Int32Array;
   readonly bin: Uint8Array;
@@ -36,12 +41,13 @@ export interface Slices {
   readonly beatStrikes: Uint8Array;
   readonly atStart: Uint8Array;
   readonly atEnd: Uint8Array;
+  readonly change: Change;
 }
 
 /** Gathers a score's sonorities from `start` to `end` (ticks) into flat arrays. Silence makes no slice: labels last through it. */
 export function gatherSlices(score: Score, sonorities: readonly Sonority[], start = -Infinity, end = Infinity): Slices {
   const chosen = sonorities.filter((sonority) => sonority.end > start && sonority.start < end && sonority.sounding.length > 0);
-  const held = holdBass(chosen);
+  const held = holdBass(chosen, score.ticksPerQuarter);
   const columns = new SliceColumns(chosen.reduce((sum, sonority) => sum + sonority.sounding.length, 0));
   const channel = readMotion(score);
   chosen.forEach((sonority, i) => {
@@ -76,6 +82,9 @@ class SliceColumns {
   private readonly bar: number[] = [];
   private readonly bass: number[] = [];
   private readonly bassMidi: number[] = [];
+  private readonly lowest: number[] = [];
+  private readonly lowestMidi: number[] = [];
+  private readonly lowestAtStart: number[] = [];
   private readonly attacks: number[] = [];
   private readonly first: number[] = [];
   private readonly bin: Uint8Array;
@@ -109,6 +118,10 @@ class SliceColumns {
     this.bar.push(sonority.bar);
     this.bass.push(bass ? clampBin(bass.pitch.fifths) : -1);
     this.bassMidi.push(bass ? midiOf(bass.pitch) : -1);
+    const lowest = sonority.sounding[0]!;
+    this.lowest.push(clampBin(lowest.pitch.fifths));
+    this.lowestAtStart.push(clampBin(lowest.pitch.fifths));
+    this.lowestMidi.push(midiOf(lowest.pitch));
     this.attacks.push(Math.min(255, sonority.attacked.length));
     this.first.push(this.size);
   }
@@ -120,8 +133,16 @@ class SliceColumns {
     this.end[slice] = sonority.end;
     this.beats[slice] = this.beats[slice]! + beats;
     for (let entry = from; entry < this.size; entry++) this.atEnd[entry] = 0;
+    this.lower(slice, sonority.sounding[0]!);
     const bins = this.listBins(sonority, channel);
     for (const bin of bins) this.addPitch(bin, beats, from, sonority.level <= 2, isFirst);
+  }
+
+  private lower(slice: number, note: Note): void {
+    const height = midiOf(note.pitch);
+    if (height >= this.lowestMidi[slice]!) return;
+    this.lowestMidi[slice] = height;
+    this.lowest[slice] = clampBin(note.pitch.fifths);
   }
 
   /** Bins that sound; a pitch in several voices keeps its plainest channel and is struck when any of them strikes it. */
@@ -162,7 +183,7 @@ class SliceColumns {
 
   finish(): Slices {
     const { size } = this;
-    return {
+    const columns = {
       count: this.start.length,
       start: Float64Array.from(this.start),
       end: Float64Array.from(this.end),
@@ -171,6 +192,9 @@ class SliceColumns {
       bar: Int32Array.from(this.bar),
       bass: Int16Array.from(this.bass),
       bassMidi: Int16Array.from(this.bassMidi),
+      lowest: Int16Array.from(this.lowest),
+      lowestMidi: Int16Array.from(this.lowestMidi),
+      lowestAtStart: Int16Array.from(this.lowestAtStart),
       attacks: Uint8Array.from(this.attacks),
       first: Int32Array.from([...this.first, size]),
       bin: this.bin.slice(0, size),
@@ -180,7 +204,8 @@ class SliceColumns {
       beatStrikes: this.beatStrikes.slice(0, size),
       atStart: this.atStart.slice(0, size),
       atEnd: this.atEnd.slice(0, size),
-    };
+    } satisfies Sounds & Omit<Slices, 'change'>;
+    return { ...columns, change: measureChange(columns, BINS) };
   }
 }
 

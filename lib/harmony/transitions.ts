@@ -1,12 +1,13 @@
-import { bassMotionOf } from './bass-motion';
-import { KEY_COUNT, modeOf, tonicOf } from './key-terms';
-import { CHORD_SPAN, keyOfState, inversionOfState, labelOfState } from './lattice';
+import { BASS_MOTIONS, bassMotionOf as importedBassMotionOf } from './bass-motion';
+import { KEY_COUNT, modeOf as importedModeOf, tonicOf as importedTonicOf } from './key-terms';
+import { CHORD_SPAN, keyOfState as importedKeyOfState, inversionOfState as importedInversionOfState, labelOfState as importedLabelOfState } from './lattice';
 import { type Material } from './material';
 import { type TermSink } from './node-terms';
 import { relationOf, signatureDistance } from './relation';
 import { DOMINANT_SEVENTH, KIND_COUNT, MAJOR, TEMPLATES } from './templates';
 import { TRANSITION_AT } from './transition-terms';
 import {
+  type AppliedTarget,
   type EngineLabel,
   LABELS,
   LABEL_CLASS as CLASSES,
@@ -14,10 +15,21 @@ import {
   LABEL_KIND as LABEL_KINDS,
   LABEL_ROOT as ROOTS,
   LABEL_ROW,
+  LABEL_TONICISED,
+  LABEL_TONICISED_MODE,
   ROW_COUNT,
-  findLabels,
+  findLabels as importedFindLabels,
 } from './vocabulary';
 import { AT, type Tables, type Weights } from './weights';
+
+/** Imported values are bound once here: they are read in the innermost loops. */
+const tonicOf = importedTonicOf;
+const modeOf = importedModeOf;
+const keyOfState = importedKeyOfState;
+const labelOfState = importedLabelOfState;
+const inversionOfState = importedInversionOfState;
+const bassMotionOf = importedBassMotionOf;
+const findLabels = importedFindLabels;
 
 const T = Object.fromEntries(Object.entries(TRANSITION_AT).map(([name, at]) => [name, AT.transition + at])) as Readonly<Record<string, number>>;
 const PROGRESSION = T['progression-frequency']!;
@@ -29,6 +41,12 @@ const RESOLVES = T['applied-resolves']!;
 const RESOLVES_OTHER_MODE = T['applied-resolves-other-mode']!;
 const GOES_ON = T['applied-goes-on']!;
 const ELSEWHERE = T['applied-elsewhere']!;
+const LEADING_TONE_TO_TARGET = T['applied-leading-tone-resolves']!;
+const LEADING_TONE_TO_OTHER_MODE = T['applied-leading-tone-resolves-other-mode']!;
+const TO_SIX_FOUR = T['applied-to-six-four']!;
+const TO_OTHER_SIX_FOUR = T['applied-to-six-four-other-mode']!;
+const CHAIN = T['applied-chain']!;
+const DECEPTIVE = T['applied-deceptive']!;
 const SIX_FOUR_RESOLVES = T['six-four-resolves']!;
 const SIX_FOUR_ELSEWHERE = T['six-four-elsewhere']!;
 const AUTHENTIC = T.authentic!;
@@ -39,6 +57,11 @@ const DISTANCE = T['key-distance']!;
 const PIVOT = T['pivot-frequency']!;
 const PIVOT_PROGRESSION = T['pivot-progression']!;
 const NO_PIVOT = T['no-pivot']!;
+const CHANGE_ACCIDENTALS = T['change-accidentals']!;
+const CHANGE_LENGTH = T['change-length']!;
+const CHANGE_PACE = T['change-pace']!;
+const INTO_TONICISED = T['change-into-tonicised']!;
+const FROM_TONICISED = T['change-from-tonicised']!;
 const ON_DOWNBEAT = T['change-on-downbeat']!;
 const WITH_SIGNATURE = T['change-with-signature']!;
 const MODE_ONLY = T['change-mode-only']!;
@@ -57,6 +80,11 @@ const ROWS = ROW_COUNT;
 const LABEL_ROOT = ROOTS;
 const LABEL_KIND = LABEL_KINDS;
 const LABEL_CLASS = CLASSES;
+const MOTIONS = BASS_MOTIONS.length;
+const CLASS_COUNT = LABEL_CLASSES.length;
+const TONICISED = LABEL_TONICISED;
+const TONICISED_MODE = LABEL_TONICISED_MODE;
+const APPLIED_LEADING_TONE = LABEL_CLASSES.indexOf('applied-leading-tone');
 const IS_SIX_FOUR = Uint8Array.from(LABELS, (label) => (label.sixFour ? 1 : 0));
 /** Bass tone of a chord (label · 4 + inversion) relative to the tonic. */
 const BASS = new Int8Array(LABELS.length * 4);
@@ -107,6 +135,8 @@ export class Transitions {
     const shift = (toKey >> 1) - (fromKey >> 1);
     let sum = this.scoreKeys(fromKey, toKey) + values[MOTION + bassMotionOf(this.bass[to]! + shift - this.bass[from]!)]!;
     sum += values[LEAVES + LABEL_CLASS[a]!]! + values[ARRIVES + LABEL_CLASS[b]!]!;
+    if (entersTonicised(a, shift, toKey)) sum += values[INTO_TONICISED]!;
+    if (entersTonicised(b, -shift, fromKey)) sum += values[FROM_TONICISED]!;
     const { slices, evidence } = this.material;
     if (slices.level[j] === 0) sum += values[ON_DOWNBEAT]!;
     if (evidence.home.signature[j] !== evidence.home.signature[j - 1]) sum += values[WITH_SIGNATURE]!;
@@ -151,7 +181,9 @@ export class Transitions {
       return true;
     }
     const bass = (this.bass[(labelOfState(to) << 2) + inversionOfState(to)]! + tonicOf(toKey)) - (this.bass[(labelOfState(from) << 2) + inversionOfState(from)]! + tonicOf(fromKey));
-    sink(MOTION + bassMotionOf(bass), 1);
+    const motion = bassMotionOf(bass);
+    sink(MOTION + motion, 1);
+    if (fromKey === toKey) sink(AT.classMotion + (LABEL_CLASS[labelOfState(from)]! * CLASS_COUNT + LABEL_CLASS[labelOfState(to)]!) * MOTIONS + motion, 1);
     if (fromKey === toKey) this.readProgression(labelOfState(from), labelOfState(to), inversionOfState(from) + inversionOfState(to) === 0, sink);
     else this.readKeyChange(from, to, j, sink);
     return true;
@@ -197,10 +229,23 @@ export class Transitions {
     } else if (next.root === target.offset && !next.target) {
       const third = TEMPLATES[next.kind]!.tones[1];
       const mode = third === 4 ? 'major' : 'minor';
-      sink(mode === target.mode ? RESOLVES : RESOLVES_OTHER_MODE, 1);
+      const isSame = mode === target.mode;
+      sink(isSame ? RESOLVES : RESOLVES_OTHER_MODE, 1);
+      if (LABELS[from]!.labelClass === APPLIED_LEADING_TONE) sink(isSame ? LEADING_TONE_TO_TARGET : LEADING_TONE_TO_OTHER_MODE, 1);
     } else {
-      sink(ELSEWHERE, 1);
+      this.readElsewhere(target, next, sink);
     }
+  }
+
+  /** An applied chord that does not go to its target: to the six-four above it, on in a chain, to its sixth degree. */
+  private readElsewhere(target: AppliedTarget, next: EngineLabel, sink: TermSink): void {
+    if (target.offset === 1 && next.sixFour && !next.target && next.root === 0) {
+      sink((next.kind === MAJOR) === (target.mode === 'major') ? TO_SIX_FOUR : TO_OTHER_SIX_FOUR, 1);
+      return;
+    }
+    sink(ELSEWHERE, 1);
+    if (next.target && next.root === target.offset) sink(CHAIN, 1);
+    else if (!next.target && (next.root === target.offset + 3 || next.root === target.offset - 4)) sink(DECEPTIVE, 1);
   }
 
   private readKeyChange(from: number, to: number, j: number, sink: TermSink): void {
@@ -212,6 +257,9 @@ export class Transitions {
     this.readKeys(fromKey, toKey, sink);
     sink(LEAVES + a.labelClass, 1);
     sink(ARRIVES + b.labelClass, 1);
+    const shift = tonicOf(toKey) - tonicOf(fromKey);
+    if (entersTonicised(a.id, shift, toKey)) sink(INTO_TONICISED, 1);
+    if (entersTonicised(b.id, -shift, fromKey)) sink(FROM_TONICISED, 1);
     if (slices.level[j] === 0) sink(ON_DOWNBEAT, 1);
     if (evidence.home.signature[j] !== evidence.home.signature[j - 1]) sink(WITH_SIGNATURE, 1);
     this.readPivot(a.root + tonicOf(fromKey) - tonicOf(toKey), a.kind, a.sixFour, modeOf(toKey), b.id, sink);
@@ -224,6 +272,10 @@ export class Transitions {
     sink(AT.relation + relation, 1);
     sink(DISTANCE, Math.min(6, signatureDistance(from, to)));
     if (tonicOf(from) === tonicOf(to)) sink(MODE_ONLY, 1);
+    const { evidence, slices } = this.material;
+    sink(CHANGE_ACCIDENTALS, 10 * evidence.accidentals);
+    sink(CHANGE_LENGTH, Math.log2(Math.max(2, evidence.bars)));
+    sink(CHANGE_PACE, slices.change.pace);
   }
 
   /** The chord before, as it would be heard in the new key. */
@@ -238,6 +290,11 @@ export class Transitions {
     sink(PIVOT, tables.label[label]!);
     if (label !== next) sink(PIVOT_PROGRESSION, tables.progression[this.row[label]! * ROW_COUNT + this.row[next]!]!);
   }
+}
+
+/** Whether a label is applied to what is the tonic of the other key (its tonic `shift` fifths up), in that key's mode. */
+function entersTonicised(label: number, shift: number, otherKey: number): boolean {
+  return TONICISED[label] === shift && shift !== 0 && TONICISED_MODE[label] === (otherKey & 1);
 }
 
 function pivotSlot(mode: number, root: number, kind: number, sixFour: boolean): number {

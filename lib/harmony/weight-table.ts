@@ -1,22 +1,23 @@
+import { BASS_MOTIONS } from './bass-motion';
 import { CHORD_TERMS } from './chord-terms';
 import { type Counts, smoothCounts } from './frequencies';
 import { KEY_FACTS, KEY_PROFILE_COUNT, KEY_WINDOWS, PROFILE_LOW, PROFILE_SIZE, profileAt } from './key-terms';
 import { LABEL_TERMS } from './label-terms';
+import { SPAN_TERMS } from './span-terms';
 import { TRANSITION_TERMS } from './transition-terms';
 import { LABELS, LABEL_CLASSES, LABEL_COUNT, ROWS, ROW_COUNT } from './vocabulary';
-import { AT, type Weights, handWeights } from './weights';
-import { RELATIONS } from './weights';
+import { AT, RELATIONS, type Weights, handWeights } from './weights';
 
 type Numbers = Readonly<Record<string, number>>;
 
 /** The readable form of the weights, as committed in weights.json: every number under the name of its term. */
 export interface WeightTable {
   readonly provenance: Readonly<Record<string, string | number>>;
-  readonly terms: { readonly chord: Numbers; readonly key: Numbers; readonly label: Numbers; readonly transition: Numbers };
+  readonly terms: { readonly chord: Numbers; readonly span: Numbers; readonly key: Numbers; readonly label: Numbers; readonly transition: Numbers };
   /** Per window and mode: weight of a pitch's share by its place on the line of fifths from the tonic, lowest first. */
   readonly keyProfiles: Readonly<Record<string, readonly number[]>>;
   /** Fine corrections, those that matter: `major V7`, `class, triad or seventh, inversion`, `row > row`. */
-  readonly corrections: { readonly label: Numbers; readonly inversion: Numbers; readonly metre: Numbers; readonly relation: Numbers; readonly progression: Numbers };
+  readonly corrections: { readonly label: Numbers; readonly inversion: Numbers; readonly metre: Numbers; readonly length: Numbers; readonly labelInversion: Numbers; readonly motion: Numbers; readonly relation: Numbers; readonly progression: Numbers };
   /** What was counted in the analysed scores. */
   readonly counts: { readonly label: Numbers; readonly inversion: Readonly<Record<string, readonly number[]>>; readonly progression: Numbers; readonly relation: Numbers; readonly profile: Readonly<Record<string, readonly number[]>> };
 }
@@ -24,7 +25,10 @@ export interface WeightTable {
 const MODE_NAMES = ['major', 'minor'] as const;
 const INVERSION_SLOT_NAMES = LABEL_CLASSES.flatMap((name) => ['triad', 'seventh'].flatMap((size) => [0, 1, 2, 3].map((i) => `${name}, ${size}, ${i}`)));
 const METRE_NAMES = LABEL_CLASSES.flatMap((name) => ['downbeat', 'half-bar', 'beat', 'half-beat', 'off'].map((level) => `${name} on ${level}`));
+const LENGTH_NAMES = LABEL_CLASSES.flatMap((name) => ['length', 'under a beat', 'a bar'].map((length) => `${name}, ${length}`));
+const MOTION_NAMES = LABEL_CLASSES.flatMap((from) => LABEL_CLASSES.flatMap((to) => BASS_MOTIONS.map((motion) => `${from} > ${to}, ${motion}`)));
 const LABEL_NAMES = LABELS.map((label) => `${label.mode} ${label.name}`);
+const LABEL_INVERSION_NAMES = LABEL_NAMES.flatMap((name) => [0, 1, 2, 3].map((inversion) => `${name}, ${inversion}`));
 const RELATION_NAMES = Array.from({ length: RELATIONS }, (_, relation) => {
   const modes = Math.floor(relation / 13);
   const distance = (relation % 13) - 6;
@@ -62,6 +66,7 @@ export function formatWeights(weights: Weights, counts: Counts, provenance: Weig
     provenance: { ...provenance, 'lowest place in key profiles': PROFILE_LOW },
     terms: {
       chord: named(CHORD_TERMS.map(([name]) => name), values, AT.chord),
+      span: named(SPAN_TERMS.map(([name]) => name), values, AT.span),
       key: named(KEY_FACTS.map(([name]) => name), values, AT.key + KEY_PROFILE_COUNT),
       label: named(LABEL_TERMS.map(([name]) => name), values, AT.label),
       transition: named(TRANSITION_TERMS.map(([name]) => name), values, AT.transition),
@@ -71,6 +76,9 @@ export function formatWeights(weights: Weights, counts: Counts, provenance: Weig
       label: correct((i) => LABEL_NAMES[i]!, AT.perLabel, LABEL_COUNT),
       inversion: correct((i) => INVERSION_SLOT_NAMES[i]!, AT.inversion, INVERSION_SLOT_NAMES.length),
       metre: correct((i) => METRE_NAMES[i]!, AT.classLevel, METRE_NAMES.length),
+      length: correct((i) => LENGTH_NAMES[i]!, AT.classLength, LENGTH_NAMES.length),
+      labelInversion: correct((i) => LABEL_INVERSION_NAMES[i]!, AT.labelInversion, LABEL_INVERSION_NAMES.length),
+      motion: correct((i) => MOTION_NAMES[i]!, AT.classMotion, MOTION_NAMES.length),
       relation: correct((i) => RELATION_NAMES[i]!, AT.relation, RELATIONS),
       progression: correct(nameProgression, AT.progression, ROW_COUNT * ROW_COUNT),
     },
@@ -125,6 +133,7 @@ export function readWeights(table: WeightTable): { readonly weights: Weights; re
   const choosing = handWeights(smoothCounts(readCounts(table.counts)));
   const values = Float64Array.from(choosing.values);
   fill(values, AT.chord, CHORD_TERMS.map(([name]) => name), table.terms.chord);
+  fill(values, AT.span, SPAN_TERMS.map(([name]) => name), table.terms.span);
   fill(values, AT.key + KEY_PROFILE_COUNT, KEY_FACTS.map(([name]) => name), table.terms.key);
   fill(values, AT.label, LABEL_TERMS.map(([name]) => name), table.terms.label);
   fill(values, AT.transition, TRANSITION_TERMS.map(([name]) => name), table.terms.transition);
@@ -132,6 +141,9 @@ export function readWeights(table: WeightTable): { readonly weights: Weights; re
   fill(values, AT.perLabel, LABEL_NAMES, table.corrections.label);
   fill(values, AT.inversion, INVERSION_SLOT_NAMES, table.corrections.inversion);
   fill(values, AT.classLevel, METRE_NAMES, table.corrections.metre);
+  fill(values, AT.classLength, LENGTH_NAMES, table.corrections.length);
+  fill(values, AT.labelInversion, LABEL_INVERSION_NAMES, table.corrections.labelInversion);
+  fill(values, AT.classMotion, MOTION_NAMES, table.corrections.motion);
   fill(values, AT.relation, RELATION_NAMES, table.corrections.relation);
   fillProgressions(values, AT.progression, table.corrections.progression);
   return { weights: { values, tables: choosing.tables }, choosing };

@@ -1,3 +1,4 @@
+import { BASS_MOTIONS } from './bass-motion';
 import { CHORD_TERMS, CHORD_TERM_COUNT, HAND_CHORD_WEIGHTS } from './chord-terms';
 import {
   HAND_FACT_WEIGHTS,
@@ -10,16 +11,21 @@ import {
   profileAt,
 } from './key-terms';
 import { HAND_LABEL_WEIGHTS, LABEL_TERMS } from './label-terms';
+import { HAND_SPAN_WEIGHTS, SPAN_TERMS, SPAN_TERM_COUNT } from './span-terms';
 import { HAND_TRANSITION_WEIGHTS, TRANSITION_TERMS } from './transition-terms';
 import { LABELS, LABEL_CLASSES, LABEL_COUNT, ROW_COUNT } from './vocabulary';
 
 /**
  * All weights in one flat vector `values`, block after block; the blocks' starts are in AT. Named terms come first, then
- * the fine corrections to the frequency tables: per label, class × inversion, class × metrical level, row × row, relation.
+ * the fine corrections to the frequency tables: per label, class × inversion, class × metrical
+ * level, class × length, label × inversion, class × class × bass motion, relation, row × row.
  */
 export const RELATIONS = 2 * 2 * 13;
 export const INVERSION_SLOTS = LABEL_CLASSES.length * 2 * 4;
 export const CLASS_LEVELS = LABEL_CLASSES.length * 5;
+/** Per class: weight of the log length, of being shorter than a beat, of filling a bar. */
+export const CLASS_LENGTHS = LABEL_CLASSES.length * 3;
+export const CLASS_MOTIONS = LABEL_CLASSES.length * LABEL_CLASSES.length * BASS_MOTIONS.length;
 
 function layOut() {
   let next = 0;
@@ -30,12 +36,16 @@ function layOut() {
   };
   return {
     chord: block(CHORD_TERM_COUNT),
+    span: block(SPAN_TERM_COUNT),
     key: block(KEY_TERM_COUNT),
     label: block(LABEL_TERMS.length),
     transition: block(TRANSITION_TERMS.length),
     perLabel: block(LABEL_COUNT),
     inversion: block(INVERSION_SLOTS),
     classLevel: block(CLASS_LEVELS),
+    classLength: block(CLASS_LENGTHS),
+    labelInversion: block(LABEL_COUNT * 4),
+    classMotion: block(CLASS_MOTIONS),
     relation: block(RELATIONS),
     progression: block(ROW_COUNT * ROW_COUNT),
     size: next,
@@ -72,6 +82,7 @@ export function inversionSlot(label: number, isSeventh: boolean, inversion: numb
 export function handWeights(tables: Tables): Weights {
   const values = new Float64Array(AT.size);
   CHORD_TERMS.forEach(([name], i) => (values[AT.chord + i] = HAND_CHORD_WEIGHTS[name] ?? 0));
+  SPAN_TERMS.forEach(([name], i) => (values[AT.span + i] = HAND_SPAN_WEIGHTS[name] ?? 0));
   KEY_WINDOWS.forEach((_, window) => {
     for (let mode = 0; mode < 2; mode++) {
       for (let place = 0; place < PROFILE_SIZE; place++) {

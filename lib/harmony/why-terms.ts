@@ -1,5 +1,5 @@
 import { type Score } from '../score/score';
-import { CHORD_TERMS, CHORD_TERM_COUNT, fillChordTerms, fillSpanTerms } from './chord-terms';
+import { CHORD_TERMS, CHORD_TERM_COUNT, fillChordTerms } from './chord-terms';
 import { KEY_FACTS, KEY_FACT_COUNT, KEY_PROFILE_COUNT, type KeyEvidence, fillKeyFacts, keyNumber } from './key-terms';
 import { scoreKeyAt } from './keys-tried';
 import { LABEL_TERMS } from './label-terms';
@@ -11,13 +11,14 @@ import { type Label, type Reading, type Term } from './reading';
 import { SpanSound } from './segments';
 import { getShippedWeights } from './shipped-weights';
 import { BIN_SHIFT, type Slices } from './slices';
+import { SPAN_TERM_COUNT, fillSpanTerms } from './span-terms';
 import { TRANSITION_TERMS } from './transition-terms';
 import { Transitions } from './transitions';
 import { LABELS, findLabel } from './vocabulary';
 import { AT, type Weights } from './weights';
 
 /** Terms that every chord of a span shares, or that only tell chords apart by name: no argument for a person. */
-const BOOKKEEPING = /^(span|starts-|ends-|length-|kind-|bass-n|bass-[^afo]|all-)/;
+const BOOKKEEPING = /^(length-|kind-|bass-n|bass-[^afo]|all-)/;
 
 interface Ground {
   readonly slices: Slices;
@@ -77,18 +78,30 @@ function weighSpan(ground: Ground, label: Label, own: { key: number; id: number 
   const { root, kind } = LABELS[own.id]!;
   const chord = { root: root + label.key.tonic + BIN_SHIFT, kind, inversion: label.numeral!.inversion, rank: 0 };
   const row = new Float32Array(CHORD_TERM_COUNT);
-  fillSpanTerms(row, sound, slices, from, to);
-  fillChordTerms(row, sound, chord);
+  fillChordTerms(row, sound, slices, to, chord);
   CHORD_TERMS.forEach(([name, sentence], t) => {
-    if (row[t] !== 0 && !BOOKKEEPING.test(name)) add(mergeChannels(name), sentence.replace(/ plainly|, but moves on by step| only in passing| and moves on by step/, ''), row[t]! * weights.values[AT.chord + t]!);
+    if (row[t] === 0 || BOOKKEEPING.test(name)) return;
+    const argument = joinFamily(name, sentence);
+    add(argument.name, argument.sentence, row[t]! * weights.values[AT.chord + t]!);
   });
   weighKey(evidence, own.key, from, to, slices, weights, add);
   weighFrequency(ground, chord, own, from, to, weights, add);
 }
 
-/** The three ways in which a tone moves on are one argument to a reader. */
-function mergeChannels(name: string): string {
-  return name.replace(/-(plain|stepping|ornamental)$/, '-sounds');
+/** Terms that are one argument to a reader: the ways in which a tone moves on, the places at which the bass is asked. */
+const FAMILIES: readonly (readonly [members: RegExp, name: string, sentence: string | null])[] = [
+  [/^foreign-/, 'foreign-sounds', 'notes foreign to the chord sound'],
+  [/^(bass|lowest)-agrees/, 'bass-agrees', 'the bass has the tone of this inversion'],
+  [/^(dominant-)?seventh-(share|at-start|late|resolves|stays|on-beat|moves)$/, 'seventh-place', 'when the seventh comes and where it goes'],
+  [/^minor-seventh-left-out/, 'minor-seventh-left-out', 'a minor seventh sounds above a plain major triad'],
+  [/-(plain|stepping|ornamental)$/, '-sounds', null],
+];
+
+function joinFamily(name: string, sentence: string): { name: string; sentence: string } {
+  const family = FAMILIES.find(([members]) => members.test(name));
+  if (!family) return { name, sentence };
+  const [members, joined, said] = family;
+  return said ? { name: joined, sentence: said } : { name: name.replace(members, joined), sentence: sentence.replace(/, but moves on by step| only in passing| and moves on by step/, '') };
 }
 
 function weighKey(evidence: KeyEvidence, key: number, from: number, to: number, slices: Slices, weights: Weights, add: AddTerm): void {
@@ -132,6 +145,10 @@ function oneSpan({ slices, evidence }: Ground, from: number, to: number, chord: 
     plain.push(slices.channel[p] === 0 ? slices.sounding[p]! : 0);
     moving.push(slices.channel[p] === 0 ? 0 : slices.sounding[p]!);
   }
+  const spanTerms = new Float32Array(SPAN_TERM_COUNT);
+  const sound = new SpanSound();
+  for (let i = from; i < to; i++) sound.addSlice(slices, i);
+  fillSpanTerms(spanTerms, sound, slices, from, to);
   const one = (value: number) => Int32Array.of(value);
   return {
     slices,
@@ -142,6 +159,7 @@ function oneSpan({ slices, evidence }: Ground, from: number, to: number, chord: 
     kind: Uint8Array.of(chord.kind),
     inversion: Uint8Array.of(chord.inversion),
     terms: new Float32Array(CHORD_TERM_COUNT),
+    spanTerms,
     soundFrom: Int32Array.of(0, bins.length),
     soundBin: Uint8Array.from(bins),
     soundPlain: Float32Array.from(plain),

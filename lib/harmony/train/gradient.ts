@@ -7,6 +7,7 @@ import { type Material } from '../material';
 import { NodeTerms } from '../node-terms';
 import { type Posterior } from '../posterior';
 import { BIN_SHIFT } from '../slices';
+import { SPAN_TERM_COUNT } from '../span-terms';
 import { type Transitions } from '../transitions';
 import { AT, type Weights } from '../weights';
 
@@ -59,13 +60,17 @@ function gatherNodes(gradient: Gradient, instance: Instance, difference: Float64
   for (let n = 0; n < lattice.count; n++) {
     const by = difference[n]!;
     if (Math.abs(by) < LEAST) continue;
-    const row = lattice.candidate[n]! * CHORD_TERM_COUNT;
-    for (let t = 0; t < CHORD_TERM_COUNT; t++) {
-      const amount = material.terms[row + t]!;
-      if (amount !== 0) gradient.add(AT.chord + t, by * amount);
-    }
+    addRow(gradient, AT.chord, material.terms, lattice.candidate[n]! * CHORD_TERM_COUNT, CHORD_TERM_COUNT, by);
+    addRow(gradient, AT.span, material.spanTerms, lattice.segment[n]! * SPAN_TERM_COUNT, SPAN_TERM_COUNT, by);
     const state = lattice.state[n]!;
     terms.readLabel(lattice.segment[n]!, lattice.candidate[n]!, keyOfState(state), labelOfState(state), (weight, amount) => gradient.add(weight, by * amount));
+  }
+}
+
+function addRow(gradient: Gradient, block: number, terms: Float32Array, at: number, size: number, by: number): void {
+  for (let t = 0; t < size; t++) {
+    const amount = terms[at + t]!;
+    if (amount !== 0) gradient.add(block + t, by * amount);
   }
 }
 

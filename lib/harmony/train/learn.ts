@@ -18,7 +18,7 @@ export interface TrainingItem {
 export interface LearningOptions {
   readonly epochs: number;
   readonly seed: number;
-  /** Step of AdaGrad for the named terms of chord and key; for labels and transitions; for the fine corrections. */
+  /** Step of AdaGrad for the named terms of chord, span and key; for labels and transitions; for the fine corrections. */
   readonly namedRate: number;
   readonly labelRate: number;
   readonly fineRate: number;
@@ -26,10 +26,13 @@ export interface LearningOptions {
   readonly margin: number;
 }
 
-export const LEARNING: LearningOptions = { epochs: 4, seed: 1, namedRate: 0.02, labelRate: 0.04, fineRate: 0.04, margin: 1 };
+export const LEARNING: LearningOptions = { epochs: 8, seed: 1, namedRate: 0.02, labelRate: 0.04, fineRate: 0.04, margin: 1 };
 
 /** Learning sees a narrower lattice than the search: what is far off teaches nothing. */
 const TRAINING_LATTICE = { ...LATTICE_OPTIONS, nodesPerSegment: 24, nodeMargin: 8 };
+
+/** The reference is found by its credit alone; few rivals matter. */
+const WANTED_SEARCH = { beam: 12, beamMargin: 60, otherKeys: 6 };
 
 /** A small seeded generator (mulberry32), so that training gives the same weights every time. */
 export function seededRandom(seed: number): () => number {
@@ -98,7 +101,7 @@ function learnItem(item: TrainingItem, weights: Weights, gradient: Gradient, opt
 
 /** The path of most credit, the model deciding where the reference leaves room. */
 function findWanted(lattice: Lattice, transitions: Transitions, credit: Float64Array): Path {
-  return search(lattice, transitions, SEARCH_OPTIONS, credit.map((beats) => 30 * beats)).best;
+  return search(lattice, transitions, WANTED_SEARCH, credit.map((beats) => 30 * beats)).best;
 }
 
 function scorePath(lattice: Lattice, transitions: Transitions, starts: Int32Array, path: Path, cost: Float64Array): number {
