@@ -6,6 +6,10 @@ import { validateReading } from '@/lib/harmony/validate';
 import { type Note, type Score, ticks } from '@/lib/score/score';
 import { type Pitch, LETTERS, fifths, letterOf } from '@/lib/theory/pitch';
 import { formatNumeral } from '@/lib/theory/numeral-format';
+import { KEYS } from '@/lib/theory/key';
+import { parseNumeral } from '@/lib/theory/numeral-parse';
+import { unwrap } from '@/lib/result';
+import { realise } from '../../support/chorale';
 import { scoreFrom } from '../../support/notation';
 
 // Common practice, no source: what must hold for any music.
@@ -72,5 +76,34 @@ describe('proposeReading, whatever the music', () => {
       { numRuns: 20, seed: 4 },
     );
   });
-});
 
+  // Progressions of every textbook, common practice, no source.
+  it.each([
+    ['major', 'I IV V7 I'],
+    ['major', 'I V6 I ii65 V7 I'],
+    ['major', 'I ii6 Cad64 V7 I'],
+    ['major', 'I V7/V V V7 I'],
+    ['minor', 'i iv V7 i'],
+    ['minor', 'i iiø65 V7 i'],
+    ['minor', 'i V65 i Ger65 V i'],
+    ['minor', 'i N6 V7 i'],
+  ] as const)('reads a worked example in any %s key back as its numerals: %s', (mode, progression) => {
+    const keys = KEYS.filter((key) => key.mode === mode);
+    fc.assert(
+      fc.property(fc.constantFrom(...keys), (key) => {
+        const numerals = progression.split(' ').map((text) => unwrap(parseNumeral(text, mode)));
+        const { labels } = proposeReading(realise(key, numerals));
+        expect(labels.map(({ numeral }) => (numeral ? formatNumeral(numeral, mode) : '_'))).toEqual(numerals.map((numeral) => formatNumeral(numeral, mode)));
+        expect(labels.every(({ key: found }) => found.tonic === key.tonic && found.mode === mode)).toBe(true);
+      }),
+      { numRuns: 10, seed: 4 },
+    );
+  });
+
+  it('gives the same reading twice, whatever the music', () => {
+    for (const notation of MUSIC) {
+      const score = scoreFrom(notation);
+      expect(proposeReading(score)).toEqual(proposeReading(score));
+    }
+  });
+});
