@@ -60,7 +60,22 @@ interface QuestionsProps {
 }
 
 function Questions({ questions, kinds, place }: QuestionsProps) {
-  const hardest = [...questions].sort((a, b) => a.mean - b.mean || a.start - b.start);
+  const hardest = questions.filter(({ mean }) => mean < 1).sort((a, b) => a.mean - b.mean || a.start - b.start);
+  const easy = questions.length - hardest.length;
+  return (
+    <>
+      {hardest.length > 0 ? <HardQuestions questions={hardest} kinds={kinds} place={place} /> : null}
+      {easy > 0 ? <p className="mt-3 text-small text-ink-soft">{wordsForEasy(easy, hardest.length)}</p> : null}
+    </>
+  );
+}
+
+function wordsForEasy(easy: number, hard: number): string {
+  if (hard === 0) return 'Every question was answered for full marks by everybody.';
+  return easy === 1 ? 'One more question was answered for full marks by everybody.' : `${easy} more questions were answered for full marks by everybody.`;
+}
+
+function HardQuestions({ questions, kinds, place }: QuestionsProps) {
   return (
     <Table caption="Questions, the hardest first">
       <thead>
@@ -72,7 +87,7 @@ function Questions({ questions, kinds, place }: QuestionsProps) {
         </Row>
       </thead>
       <tbody>
-        {hardest.map(({ start, mean, verdicts }) => (
+        {questions.map(({ start, mean, verdicts }) => (
           <Row key={start}>
             <Th scope="row" className="whitespace-nowrap first-letter:uppercase">{place(start)}</Th>
             <Td className="tabular text-right">{Math.round(mean * 100)} %</Td>
