@@ -1,6 +1,6 @@
 import { type Candidate } from './candidates';
 import { keyNumber } from './key-terms';
-import { stateOf } from './lattice';
+import { type Lattice, stateOf } from './lattice';
 import { type Material } from './material';
 import { type Label } from './reading';
 import { BIN_SHIFT, type Slices } from './slices';
@@ -62,3 +62,30 @@ export function keepFixed({ at }: FixedSpans, material: Material): (segment: num
   };
 }
 
+
+/**
+ * −Infinity for every node that contradicts what is fixed, 0 for the others; null when the lattice lacks a fixed label, so
+ * that it must be laid anew. Every bar's part of a fixed span must be there as one node.
+ */
+export function forbidOthers(lattice: Lattice, material: Material, fixed: FixedSpans): Float64Array | null {
+  const { segments, slices } = material;
+  const keep = keepFixed(fixed, material);
+  const bonus = new Float64Array(lattice.count);
+  const found = new Uint8Array(slices.count);
+  for (let n = 0; n < lattice.count; n++) {
+    const s = lattice.segment[n]!;
+    const kept = keep(s, lattice.state[n]!);
+    if (kept === 'no') bonus[n] = -Infinity;
+    else if (kept === 'must' && fillsBar(fixed, material, s)) found.fill(1, segments.start[s]!, segments.end[s]!);
+  }
+  const isThere = fixed.at.every((span, i) => !span || span.state < 0 || found[i] === 1);
+  return isThere ? bonus : null;
+}
+
+/** Whether a segment is all of its fixed span that lies in its bar. */
+function fillsBar({ at }: FixedSpans, { segments, slices }: Material, s: number): boolean {
+  const from = segments.start[s]!;
+  const to = segments.end[s]!;
+  const goesOn = (inside: number, outside: number) => at[inside] === at[outside] && slices.bar[inside] === slices.bar[outside];
+  return !(from > 0 && goesOn(from, from - 1)) && !(to < slices.count && goesOn(to - 1, to));
+}

@@ -2,10 +2,10 @@ import { type Score, ticks } from '../score/score';
 import { type Key } from '../theory/key';
 import { fifths } from '../theory/pitch';
 import { search } from './decode';
-import { type FixedSpans, alignFixed, keepFixed } from './fixed';
+import { type FixedSpans, alignFixed, forbidOthers, keepFixed } from './fixed';
 import { modeOf, tonicOf } from './key-terms';
 import { scoreKeys } from './keys-tried';
-import { type Lattice, buildLattice, keyOfState } from './lattice';
+import { type Lattice, type LatticeOptions, buildLattice, keyOfState } from './lattice';
 import { nameInContext } from './naming';
 import { type Posterior, sumBackward } from './posterior';
 import { type Prepared, type PrepareOptions, gatherExcerpt, prepareSlices } from './prepare';
@@ -39,11 +39,19 @@ const LEAST_CERTAINTY = 0.01;
 
 /** Searches a prepared excerpt under the weights; `quarter` is the score's ticks per quarter. */
 export function decode(prepared: Prepared, weights: Weights, quarter: number, fixed?: FixedSpans): Decoded {
-  const { material, keys, keyCount } = prepared;
-  const scored = scoreKeys(material.slices, material.evidence, weights, keys, keyCount);
-  const lattice = buildLattice(material, scored, weights, fixed ? { ...LATTICE_OPTIONS, keep: keepFixed(fixed, material) } : LATTICE_OPTIONS);
-  const found = search(lattice, new Transitions(material, weights), SEARCH_OPTIONS);
-  const posterior = sumBackward(found);
+  const { material } = prepared;
+  const lattice = layLattice(prepared, weights, fixed ? { ...LATTICE_OPTIONS, keep: keepFixed(fixed, material) } : LATTICE_OPTIONS);
+  return sumUp(prepared, lattice, weights, quarter);
+}
+
+function layLattice({ material, keys, keyCount }: Prepared, weights: Weights, options: LatticeOptions): Lattice {
+  return buildLattice(material, scoreKeys(material.slices, material.evidence, weights, keys, keyCount), weights, options);
+}
+
+/** Sums over the lattice and reads the likeliest spans out of it; `bonus` forbids nodes with −Infinity. */
+function sumUp(prepared: Prepared, lattice: Lattice, weights: Weights, quarter: number, bonus?: Float64Array): Decoded {
+  const { material } = prepared;
+  const posterior = sumBackward(search(lattice, new Transitions(material, weights), SEARCH_OPTIONS, bonus), bonus);
   const states = statesBySlice(lattice, material, posterior);
   return { prepared, lattice, posterior, states, spans: chooseSpans(lattice, material, posterior, states, quarter) };
 }
@@ -65,14 +73,47 @@ export function proposeReading(score: Score, options: ProposeOptions = {}): Read
   const start = options.start ?? 0;
   const last = score.bars.at(-1);
   const end = options.end ?? (last ? last.start + last.length : 0);
-  const slices = gatherExcerpt(score, { start, end });
+  const ground = groundOf(score, start, end);
+  const { slices } = ground.prepared.material;
   const fixed = options.fixed ?? [];
   if (slices.count === 0) return makeReading(start, end, fixed);
-  const { weights, choosing } = getShippedWeights();
-  const spans = fixed.length > 0 ? alignFixed(fixed, slices) : undefined;
-  const wanted = spans ? { wantedChords: spans.chords, wantedKeys: spans.keys } : {};
-  const decoded = decode(prepareSlices(score, slices, choosing, wanted), weights, score.ticksPerQuarter, spans);
+  const decoded = fixed.length > 0 ? decodeAround(score, ground, alignFixed(fixed, slices)) : decodeFreely(score, ground);
   return makeReading(start, end, withFixed(labelSpans(decoded, slices, start, end), fixed));
+}
+
+/** What the last proposal for a score was read from: asked again around what a person fixed, only the sums are made anew. */
+interface Ground {
+  readonly start: number;
+  readonly end: number;
+  readonly prepared: Prepared;
+  readonly lattice: Lattice | null;
+}
+
+const grounds = new WeakMap<Score, Ground>();
+
+function groundOf(score: Score, start: number, end: number): Ground {
+  const known = grounds.get(score);
+  if (known?.start === start && known.end === end) return known;
+  const { weights, choosing } = getShippedWeights();
+  const slices = gatherExcerpt(score, { start, end });
+  const prepared = prepareSlices(score, slices, choosing);
+  const ground = { start, end, prepared, lattice: slices.count > 0 ? layLattice(prepared, weights, LATTICE_OPTIONS) : null };
+  grounds.set(score, ground);
+  return ground;
+}
+
+function decodeFreely(score: Score, { prepared, lattice }: Ground): Decoded {
+  return sumUp(prepared, lattice!, getShippedWeights().weights, score.ticksPerQuarter);
+}
+
+/** Where the lattice has what a person fixed, all else is forbidden in it; otherwise it is laid anew with it. */
+function decodeAround(score: Score, { prepared, lattice }: Ground, fixed: FixedSpans): Decoded {
+  const { weights, choosing } = getShippedWeights();
+  const { material } = prepared;
+  const bonus = forbidOthers(lattice!, material, fixed);
+  if (bonus) return sumUp(prepared, lattice!, weights, score.ticksPerQuarter, bonus);
+  const wanted = { wantedChords: fixed.chords, wantedKeys: fixed.keys };
+  return decode(prepareSlices(score, material.slices, choosing, wanted), weights, score.ticksPerQuarter, fixed);
 }
 
 /** A decoded score as a reading of the whole score. */

@@ -107,3 +107,27 @@ describe('proposeReading around fixed labels', () => {
     expect(proposeReading(score, { fixed: [blank] }).labels).toContainEqual(blank);
   });
 });
+
+describe('proposeReading, asked again', () => {
+  const notation = 'C: c3 e4 g4 c5 | d3 f4 a4 d5 | f#3 c4 a4 d5 | g3 b3 g4 d5 | c3 e4 g4 c5 | f3 f4 a4 c5 | g3 d4 g4 b4 | c3 e4 g4 c5';
+
+  it('gives around its own label what it gave before', () => {
+    const score = scoreFrom(notation);
+    const free = proposeReading(score);
+    const kept: Label = { ...free.labels[3]!, state: 'accepted' };
+    expect(wordsOf(proposeReading(score, { fixed: [kept] }))).toBe(wordsOf(free));
+  });
+
+  it('gives the same whether the score was asked about before or not', () => {
+    const asked = scoreFrom(notation);
+    const kept: Label = { ...proposeReading(asked).labels[2]!, state: 'accepted' };
+    expect(wordsOf(proposeReading(asked, { fixed: [kept] }))).toBe(wordsOf(proposeReading(scoreFrom(notation), { fixed: [kept] })));
+  });
+
+  it('does not take one excerpt for another', () => {
+    const score = scoreFrom(notation);
+    const whole = proposeReading(score);
+    proposeReading(score, { start: 0, end: 4 });
+    expect(proposeReading(score)).toEqual(whole);
+  });
+});
