@@ -69,7 +69,7 @@ export function vitest(project) {
 }
 
 /** The production build with the demo in it, on ports and in folders of its own. */
-async function serveDemo({ defer, workDir, distDir }) {
+export async function serveDemo({ defer, workDir, distDir }) {
   const dataDir = mkdtempSync(path.join(os.tmpdir(), 'understave-e2e-'));
   defer(async () => rmSync(dataDir, { recursive: true, force: true }));
   const fakes = await startFakes(dataDir, { throwaway: true });

@@ -1,6 +1,6 @@
 'use client';
 
-import { useEffect, useMemo } from 'react';
+import { useCallback, useEffect, useMemo } from 'react';
 import { isSettled } from '@/components/score/label-look';
 import { namePlace } from '@/components/score/beats';
 import type { Score } from '@/lib/score/score';
@@ -43,6 +43,8 @@ export function DeskBody(props: DeskBodyProps) {
   const toneMarks = useMemo(() => findToneMarks(state.reading, label.id, desk.arrows ? why : null), [state.reading, label.id, desk.arrows, why]);
   const settled = useMemo(() => state.reading.labels.filter((l) => !isGiven(l) && isSettled(l)).length, [state.reading.labels, isGiven]);
 
+  const selectLabel = useCallback((labelId: string) => dispatch({ kind: 'select', labelId }), [dispatch]);
+
   useEffect(() => onProgress?.(settled, state.reading.labels.length), [onProgress, settled, state.reading.labels.length]);
 
   useEffect(() => onSaving?.(saving.state), [onSaving, saving.state]);
@@ -84,7 +86,7 @@ export function DeskBody(props: DeskBodyProps) {
         reading={state.reading}
         selected={label}
         isGiven={isGiven}
-        onSelect={(labelId) => dispatch({ kind: 'select', labelId })}
+        onSelect={selectLabel}
         onNextOpen={context.powers.write ? () => runCommand(context, findNextOpen(state, context.canWrite) ? 'next-open' : 'last') : undefined}
       />
       <DeskDialogs desk={desk} score={score} sheet={sheet} />

@@ -1,6 +1,6 @@
 'use client';
 
-import { useEffect, useMemo, useRef } from 'react';
+import { memo, useEffect, useMemo, useRef } from 'react';
 import { Button, ShapeIcon, TONE_TEXT, classNames } from '@/components/ui';
 import { isSettled } from '@/components/score/label-look';
 import type { Label, Reading } from '@/lib/harmony/reading';
@@ -27,7 +27,7 @@ interface BarState {
 
 /** One cell per bar with its state: everything settled, some of it, nothing. */
 export function Ledger({ score, firstBar, lastBar, reading, selected, isGiven, onSelect, onNextOpen }: LedgerProps) {
-  const bars = useMemo(() => score.bars.slice(firstBar, lastBar + 1).map((bar) => stateOf(bar, reading, isGiven)), [score, firstBar, lastBar, reading, isGiven]);
+  const bars = useMemo(() => statesOf(score.bars.slice(firstBar, lastBar + 1), reading, isGiven), [score, firstBar, lastBar, reading, isGiven]);
   const counted = reading.labels.filter((l) => !isGiven(l));
   const settled = counted.filter(isSettled).length;
   const strip = useRef<HTMLOListElement>(null);
@@ -44,7 +44,7 @@ export function Ledger({ score, firstBar, lastBar, reading, selected, isGiven, o
       <ol ref={strip} aria-label="Bars" className="relative flex min-w-0 flex-1 overflow-x-auto py-0.5">
         {bars.map((state) => (
           <li key={state.bar.index}>
-            <Cell state={state} here={state.bar.index === here} onSelect={onSelect} />
+            <Cell index={state.bar.index} number={state.bar.number} labelId={state.label?.id ?? null} open={state.open} labels={state.labels} here={state.bar.index === here} onSelect={onSelect} />
           </li>
         ))}
       </ol>
@@ -53,34 +53,49 @@ export function Ledger({ score, firstBar, lastBar, reading, selected, isGiven, o
   );
 }
 
-function stateOf(bar: Bar, reading: Reading, isGiven: (label: Label) => boolean): BarState {
-  const end = bar.start + bar.length;
-  const begun = reading.labels.filter((l) => l.start >= bar.start && l.start < end);
-  const label = begun.find((l) => !isGiven(l)) ?? begun[0] ?? reading.labels.findLast((l) => l.start < bar.start) ?? null;
-  const counted = begun.filter((l) => !isGiven(l));
-  return { bar, label, labels: counted.length, open: counted.filter((l) => !isSettled(l)).length };
+/** Bars and labels both in order of time: one way through them. */
+function statesOf(bars: readonly Bar[], { labels }: Reading, isGiven: (label: Label) => boolean): BarState[] {
+  let at = 0;
+  return bars.map((bar) => {
+    const from = at;
+    while (at < labels.length && (labels[at] as Label).start < bar.start + bar.length) at += 1;
+    const begun = labels.slice(from, at);
+    const counted = begun.filter((l) => !isGiven(l));
+    const label = counted[0] ?? begun[0] ?? labels[from - 1] ?? null;
+    return { bar, label, labels: counted.length, open: counted.filter((l) => !isSettled(l)).length };
+  });
 }
 
-function lookOf({ open, labels }: BarState) {
+function lookOf({ open, labels }: Pick<BarState, 'open' | 'labels'>) {
   if (labels === 0) return { shape: 'dash', tone: 'plain', words: 'nothing begins here' } as const;
   if (open === 0) return { shape: 'disc', tone: 'settled', words: 'settled' } as const;
   return open < labels ? ({ shape: 'half', tone: 'open', words: `${open} of ${labels} open` } as const) : ({ shape: 'ring', tone: 'open', words: 'open' } as const);
 }
 
-function Cell({ state, here, onSelect }: { readonly state: BarState; readonly here: boolean; onSelect(labelId: string): void }) {
-  const look = lookOf(state);
-  const number = state.bar.number === '' ? '·' : state.bar.number;
+interface CellProps extends Pick<BarState, 'open' | 'labels'> {
+  readonly index: number;
+  /** As printed. */
+  readonly number: string;
+  readonly labelId: string | null;
+  readonly here: boolean;
+  onSelect(labelId: string): void;
+}
+
+/** Drawn anew only when something of its own bar changes: a long score has hundreds. */
+const Cell = memo(function Cell({ index, number: printed, labelId, open, labels, here, onSelect }: CellProps) {
+  const look = lookOf({ open, labels });
+  const number = printed === '' ? '·' : printed;
   return (
     <button
       type="button"
-      data-bar={state.bar.index}
+      data-bar={index}
       aria-label={`Bar ${number}: ${look.words}`}
       aria-current={here ? 'location' : undefined}
-      onClick={() => state.label && onSelect(state.label.id)}
-      className={classNames('flex h-9 w-7 flex-col items-center justify-center gap-1 border-y border-r border-rule text-micro leading-none hover:bg-bench', state.bar.index === 0 && 'border-l', here && 'bg-selection')}
+      onClick={() => labelId && onSelect(labelId)}
+      className={classNames('flex h-9 w-7 flex-col items-center justify-center gap-1 border-y border-r border-rule text-micro leading-none hover:bg-bench', index === 0 && 'border-l', here && 'bg-selection')}
     >
       <span className="tabular text-ink-soft">{number}</span>
       <ShapeIcon shape={look.shape} className={classNames('size-2.5!', TONE_TEXT[look.tone])} />
     </button>
   );
-}
+});

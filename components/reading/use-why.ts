@@ -1,14 +1,35 @@
 'use client';
 
-import { useMemo } from 'react';
-import { explainLabel } from '@/lib/harmony/explain';
+import { useEffect, useMemo, useState } from 'react';
+import type { explainLabel } from '@/lib/harmony/explain';
 import type { Reading, Why } from '@/lib/harmony/reading';
 import type { Score } from '@/lib/score/score';
 
-/** The evidence for a label, worked out here by the engine's own code; null for a blank, or without a score to look at. */
+type Explain = typeof explainLabel;
+
+/** The score is drawn first: the engine's own code and its weights are fetched when the page has come to rest. */
+const REST_MS = 250;
+
+/**
+ * The evidence for a label, worked out here by the engine's own code; null for a blank, without a score to look at, and
+ * until that code is there.
+ */
 export function useWhy(score: Score | null, reading: Reading, labelId: string): Why | null {
+  const [explain, setExplain] = useState<{ readonly run: Explain } | null>(null);
+  const isWanted = score !== null;
+  useEffect(() => {
+    if (!isWanted) return;
+    let live = true;
+    const timer = setTimeout(() => {
+      void import('@/lib/harmony/explain').then(({ explainLabel: run }) => live && setExplain({ run }));
+    }, REST_MS);
+    return () => {
+      live = false;
+      clearTimeout(timer);
+    };
+  }, [isWanted]);
   return useMemo(() => {
     const index = reading.labels.findIndex((label) => label.id === labelId);
-    return score && reading.labels[index]?.numeral ? explainLabel(score, reading, index) : null;
-  }, [score, reading, labelId]);
+    return explain && score && reading.labels[index]?.numeral ? explain.run(score, reading, index) : null;
+  }, [explain, score, reading, labelId]);
 }

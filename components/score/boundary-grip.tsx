@@ -28,8 +28,8 @@ export function BoundaryGrip({ geometry, start, onsets, onMove }: BoundaryGripPr
     <div
       aria-hidden="true"
       title="Drag to where the label begins"
-      className="absolute z-10 flex w-6 cursor-ew-resize touch-none justify-center"
-      style={{ left: place.x - 15, top: system.staffBottom + 4, height: top - system.staffBottom - 4 }}
+      className="absolute z-10 flex w-[calc(24px/var(--sheet-scale,1))] -translate-x-1/2 cursor-ew-resize touch-none justify-center"
+      style={{ left: place.x - 3, top: system.staffBottom + 4, height: top - system.staffBottom - 4 }}
       onPointerDown={(event) => {
         event.currentTarget.setPointerCapture(event.pointerId);
         event.preventDefault();

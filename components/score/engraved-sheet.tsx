@@ -53,8 +53,11 @@ export function EngravedSheet(props: EngravedSheetProps) {
 
 export type Engraving = Pick<EngravedSheetProps, 'document' | 'score' | 'first' | 'last' | 'width' | 'room'>;
 
+/** Fetched as soon as this module is there, while the score itself is still on its way. */
+const engraver = typeof window === 'undefined' ? null : import('opensheetmusicdisplay');
+
 async function engrave(host: HTMLDivElement, sheet: Engraving): Promise<SheetGeometry | null> {
-  const { OpenSheetMusicDisplay } = await import('opensheetmusicdisplay');
+  const { OpenSheetMusicDisplay } = await (engraver ?? import('opensheetmusicdisplay'));
   const proof = layProof(host, sheet.width);
   const osmd = new OpenSheetMusicDisplay(proof, options(sheet.score));
   makeRoom(osmd, sheet.room, widenFor(onsetsPerQuarter(sheet.score, sheet.first, sheet.last)));

@@ -54,9 +54,9 @@ function KeyName({ span, until, top, onOpen }: KeyNameProps) {
   const style = { left: span.x, top, height: KEY_LINE.height - 4, maxWidth: Number.isFinite(until) ? until - span.x - 2 : undefined };
   if (!onOpen || !span.begins) return <span aria-hidden={!span.begins} className={look} style={style}>{name}</span>;
   return (
-    <button type="button" tabIndex={-1} className={classNames(look, 'hover:underline')} style={style} title="Change this key" onClick={() => onOpen(span.region.start)}>
+    <button type="button" tabIndex={-1} className={classNames(look, 'lane-target overflow-visible! hover:underline')} style={style} title="Change this key" onClick={() => onOpen(span.region.start)}>
       <span className="sr-only">Key: </span>
-      {name}
+      <span className="block truncate">{name}</span>
     </button>
   );
 }

@@ -3,6 +3,7 @@
 const SUBJECTS: Readonly<Record<string, () => Promise<{ run(): Promise<void> }>>> = {
   score: () => import('./score'),
   harmony: () => import('./harmony'),
+  desk: () => import('./desk'),
 };
 
 async function main(): Promise<void> {

@@ -1,6 +1,7 @@
 import type { Metadata } from 'next';
 import Link from 'next/link';
 import { redirect } from 'next/navigation';
+import { preload } from 'react-dom';
 import { Tag } from '@/components/ui';
 import { Desk } from '@/components/reading/desk';
 import { type ReadingHead, findReading } from '@/db/queries/readings';
@@ -49,6 +50,8 @@ export default async function DeskPage({ params, searchParams }: DeskPageProps) 
   const spellings = listSpellings(await listCourses(createDeps().db, actor));
   const courseId = head.kind === 'key' ? await findCourseOfKey(createDeps().db, actor, readingId) : null;
   const base = `/api/readings/${readingId}`;
+  // The browser fetches it beside the scripts; the desk's own fetch finds it there.
+  preload(`${base}/score`, { as: 'fetch', crossOrigin: 'anonymous' });
   return (
     <div className="h-[calc(100dvh-var(--spacing-header))]">
       <Desk
