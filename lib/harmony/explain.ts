@@ -9,7 +9,7 @@ import { nameNonChordTone } from './non-chord-tones';
 import { type Label, type NonChordTone, type Reading, type Term, type Why } from './reading';
 import { findTendencyTones } from './tendency-tones';
 import { type VoiceIndex, indexVoices } from './voices';
-import { listWords, sayCadence, sayChord, sayNonChordTones, sayOtherFrame, sayQualityRule, sayTendencies } from './why-sentences';
+import { listWords, sayCadence, sayChord, sayCommonTone, sayNonChordTones, sayOtherFrame, sayQualityRule, sayTendencies } from './why-sentences';
 import { weighLabel } from './why-terms';
 
 const TERMS_FOR = 3;
@@ -47,6 +47,7 @@ export function explainLabel(score: Score, reading: Reading, labelIndex: number)
       ...sayNonChordTones(nonChordTones),
       ...sayTendencies(tendencyTones),
       ...sayQualityRule(key, numeral),
+      ...sayCommonTone(sorted.chord, numeral, around.chordAfter),
       ...sayKey(label, voices),
       ...sayCadence(findCadence(score, reading, labelIndex)),
       ...sayOtherFrame(label),

@@ -3,7 +3,8 @@ import { type Role } from '../theory/chord';
 import { type Key, formatKeyForPeople } from '../theory/key';
 import { formatNumeral } from '../theory/numeral-format';
 import { type Numeral } from '../theory/numeral';
-import { type Pitch, formatPitchClassForPeople } from '../theory/pitch';
+import { type Pitch, formatPitchClassForPeople, pitchClassOf } from '../theory/pitch';
+import { type SpelledChord } from '../theory/spell';
 import { type Cadence, type CadenceKind } from './cadences';
 import { type SortedNotes } from './chord-tones';
 import { type Label, type NonChordKind, type NonChordTone, type TendencyTone } from './reading';
@@ -85,6 +86,16 @@ export function sayQualityRule(key: Key, numeral: Numeral): readonly string[] {
   return target.mode === 'major'
     ? [`Before a major chord (${tonic}) a leading-tone seventh may be half- or fully diminished; this one is ${which}.`]
     : [`Before a minor chord (${tonic}) a leading-tone seventh is fully diminished, as here.`];
+}
+
+/**
+ * A °7 whose own tone is the root of the chord that follows embellishes it and has no function.
+ * Source: Integrated Musicianship: Theory, ch. 18b (D♯°7→C is common-tone, D♯°7→e is vii°7 of iii).
+ */
+export function sayCommonTone(chord: SpelledChord, numeral: Numeral, next: SpelledChord | null): readonly string[] {
+  if (numeral.quality !== 'diminished-seventh' || !next) return [];
+  const shared = chord.tones.find((tone) => pitchClassOf(tone.fifths) === pitchClassOf(next.root));
+  return shared ? [`It shares ${formatPitchClassForPeople(shared.fifths)}, the root of the next chord, and moves around it: a common-tone °7.`] : [];
 }
 
 const CADENCE_WORDS: Readonly<Record<CadenceKind, string>> = {

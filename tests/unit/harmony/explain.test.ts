@@ -96,6 +96,19 @@ describe('explainLabel: tendency tones', () => {
   });
 });
 
+// Source: Integrated Musicianship: Theory, ch. 18b: D♯°7→C is common-tone, D♯°7→e is vii°7 of iii.
+describe('explainLabel: common-tone °7', () => {
+  const commonTone = (notation: string, goal: string) => why(notation, [['viio7/iii', 1], [goal, 1]], 0).sentences.some((sentence) => sentence.includes('common-tone'));
+
+  it('hears a °7 that turns around the next root', () => {
+    expect(commonTone('C: d#3 f#3 a3 c4 | c3 e3 g3 c4', 'I')).toBe(true);
+  });
+
+  it('hears the same °7 resolve as a leading-tone chord', () => {
+    expect(commonTone('C: d#3 f#3 a3 c4 | e3 g3 b3 e4', 'iii')).toBe(false);
+  });
+});
+
 describe('explainLabel: the whole', () => {
   it('names a perfect authentic cadence at the end', () => {
     // Source: Open Music Theory v1, cadence types.
