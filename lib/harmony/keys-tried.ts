@@ -41,6 +41,13 @@ export interface KeysTried {
 
 export type WantedKeys = (i: number) => readonly number[];
 
+/** Beyond fourteen sharps or flats nobody names a key, whatever the notes are called. */
+const FARTHEST_SIGNATURE = 14;
+
+function isNameable(key: number): boolean {
+  return key >= 0 && key < KEY_COUNT && Math.abs(signatureOfKey(key)) <= FARTHEST_SIGNATURE;
+}
+
 /** How many of the keys may be there only because their tonic triad stands in the bar. */
 const LOCAL_TONICS = 4;
 
@@ -76,7 +83,7 @@ function findTonics(slices: Slices, from: number, to: number): readonly number[]
       beats.set(key, (beats.get(key) ?? 0) + slices.beats[i]!);
     }
   }
-  return [...beats].sort((a, b) => b[1] - a[1] || a[0] - b[0]).map(([key]) => key);
+  return [...beats].sort((a, b) => b[1] - a[1] || a[0] - b[0]).map(([key]) => key).filter(isNameable);
 }
 
 function soundsIn(slices: Slices, i: number, bin: number): boolean {
@@ -97,7 +104,7 @@ function possibleKeys(evidence: KeyEvidence): readonly number[] {
   const high = Math.min(26, Math.max(0, ...bins) + 1);
   const keys: number[] = [];
   for (let tonic = low; tonic <= high; tonic++) for (const mode of [0, 1]) keys.push(keyNumber(tonic, mode));
-  return keys.filter((key) => key >= 0 && key < KEY_COUNT && Math.abs(signatureOfKey(key)) < 30);
+  return keys.filter(isNameable);
 }
 
 /** Sum of the weighted key terms for a key at a slice, per beat. */
