@@ -1,7 +1,6 @@
 import { isSettled, lookOf } from '@/components/score/label-look';
 import { namePlace } from '@/components/score/beats';
-import { findPivot } from '@/lib/harmony/edit-keys';
-import type { Label, NonChordKind, Reading } from '@/lib/harmony/reading';
+import type { Label, NonChordKind } from '@/lib/harmony/reading';
 import type { Score } from '@/lib/score/score';
 import type { ConventionSheet } from '@/lib/theory/conventions';
 import { type Key, formatKeyForPeople } from '@/lib/theory/key';
@@ -21,12 +20,6 @@ export function describeLabel(score: Score, label: Label, sheet: ConventionSheet
   const state = given ? 'given' : label.numeral ? lookOf(label).word : 'to be written';
   const certainty = !isSettled(label) && label.certainty !== null ? `, ${speakCertainty(label.certainty)}` : '';
   return `${capital(namePlace(score, label.start))}: ${numeral}, ${state}${certainty}`;
-}
-
-/** `, pivot: two in G major`; nothing for a label that is none. */
-export function sayPivot(reading: Reading, label: Label, sheet: ConventionSheet): string {
-  const pivot = findPivot(reading, label);
-  return pivot ? `, pivot: ${typesetNumeral(pivot.numeral, pivot.key.mode, sheet).spoken} in ${formatKeyForPeople(pivot.key)}` : '';
 }
 
 /** Certainty in words and in figures: a number alone says too much. */

@@ -19,7 +19,7 @@ import { ComparedLane } from './compared-lane';
 import { findSelection, getSelected } from './desk-state';
 import type { DeskProps } from './desk-types';
 import { pressKey } from './press-key';
-import { describeLabel, sayPivot } from './label-words';
+import { describeLabel } from './label-words';
 import { NumeralEntry } from './numeral-entry';
 import { ScoreTable } from './score-table';
 import { SplitPicker } from './split-picker';
@@ -106,7 +106,7 @@ function Overlay(props: ScoreRegionProps & { readonly geometry: SheetGeometry })
   const selectedIds = useMemo(() => new Set(findSelection(state).map((l) => l.id)), [state]);
   const givenIds = useMemo(() => new Set(state.reading.labels.filter(isGiven).map((l) => l.id)), [state.reading.labels, isGiven]);
   const marks = useMemo(() => (feedback ? new Map(Object.entries(feedback)) : undefined), [feedback]);
-  const describe = useCallback((l: Label) => describeLabel(score, l, sheet, isGiven(l)) + sayPivot(state.reading, l, sheet), [score, sheet, isGiven, state.reading]);
+  const describe = useCallback((l: Label) => describeLabel(score, l, sheet, isGiven(l)), [score, sheet, isGiven]);
   const onSelect = useCallback((labelId: string, extend: boolean) => dispatch({ kind: 'select', labelId, extend }), [dispatch]);
   const onOpen = useCallback(() => powers.write && open({ kind: 'write', typed: null }), [powers.write, open]);
   useEffect(() => noteGeometry(geometry), [noteGeometry, geometry]);

@@ -69,7 +69,7 @@ export function Lanes(props: LanesProps) {
           {...position(geometry, placed)}
           face={faces.get(placed.label.id) ?? null}
           pivot={pivots.get(placed.label.id) ?? null}
-          words={words.get(placed.label.id) ?? ''}
+          words={(words.get(placed.label.id) ?? '') + sayPivot(pivots.get(placed.label.id))}
           current={placed.label.id === props.currentId}
           selected={props.selectedIds.has(placed.label.id)}
           given={props.givenIds?.has(placed.label.id) ?? false}
@@ -94,6 +94,11 @@ function pivotsOf(reading: Reading, labels: readonly Label[], sheet: ConventionS
     return pivot ? [[label.id, { key: formatKeyForPeople(pivot.key), parts: typesetNumeral(pivot.numeral, pivot.key.mode, sheet) }] as const] : [];
   });
   return new Map(found);
+}
+
+/** `, pivot: two in G major`; nothing for a label that is none. */
+function sayPivot(pivot: PivotFace | undefined): string {
+  return pivot ? `, pivot: ${pivot.parts.spoken} in ${pivot.key}` : '';
 }
 
 /** Room for the second numeral and the name of its key before it. */

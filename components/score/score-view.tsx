@@ -1,6 +1,7 @@
 'use client';
 
 import { type CSSProperties, type ReactNode, type RefObject, useLayoutEffect, useMemo, useRef, useState } from 'react';
+import { flushSync } from 'react-dom';
 import type { Score } from '@/lib/score/score';
 import { EngravedSheet } from './engraved-sheet';
 import type { SheetGeometry } from './geometry';
@@ -62,7 +63,8 @@ export function ScoreView({ xml, score, firstBar, lastBar, zoom, room = LANE_ROO
                   last={range.last}
                   width={engraved}
                   room={room}
-                  onEngraved={(drawn) => setKnown((all) => new Map(all).set(index, drawn))}
+                  // Together with the labels: the bare sheet need not be painted before.
+                  onEngraved={(drawn) => flushSync(() => setKnown((all) => new Map(all).set(index, drawn)))}
                   onFailed={setFailure}
                 />
                 {geometry ? <div className="absolute inset-0">{overlay(geometry)}</div> : null}

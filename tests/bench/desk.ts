@@ -94,24 +94,28 @@ function bareHtml(score: string): string {
   </script>`;
 }
 
-/** What the desk route's scripts weigh, compressed, without the engraver. */
+/** What the desk route's scripts weigh until its first label can be edited, compressed, without the engraver; and what every page needs of that. */
 async function weighScripts(page: Page, desk: string): Promise<void> {
-  const scripts = new Map<string, Buffer>();
-  const cold = await page.context().browser()?.newContext({ baseURL: new URL(desk).origin, viewport: WINDOW });
-  if (!cold) return;
-  await cold.addCookies(await page.context().cookies());
-  const fresh = await cold.newPage();
-  fresh.on('response', (response) => {
-    if (response.request().resourceType() === 'script') void response.body().then((body) => scripts.set(response.url(), body)).catch(() => undefined);
-  });
-  await fresh.goto(desk);
-  await labels(fresh).first().waitFor();
-  await fresh.waitForLoadState('networkidle');
-  await cold.close();
+  const of = async (url: string, ready: string) => {
+    const scripts = new Map<string, Buffer>();
+    const cold = await page.context().browser()?.newContext({ baseURL: new URL(desk).origin, viewport: WINDOW, storageState: await page.context().storageState() });
+    const fresh = await cold?.newPage();
+    fresh?.on('response', (response) => {
+      if (response.request().resourceType() === 'script') void response.body().then((body) => scripts.set(response.url(), body)).catch(() => undefined);
+    });
+    await fresh?.goto(url);
+    await fresh?.locator(ready).first().waitFor();
+    await cold?.close();
+    return scripts;
+  };
+  const scripts = await of(desk, '[data-label]');
+  const everywhere = await of('/account', 'h1');
   const isEngraver = (body: Buffer) => body.includes('OpenSheetMusicDisplay') && body.length > 500_000;
-  const weigh = (bodies: readonly Buffer[]) => bodies.reduce((sum, body) => sum + gzipSync(body, { level: 9 }).length, 0) / 1000;
-  const all = [...scripts.values()];
-  console.log(`scripts of the desk route: ${round(weigh(all.filter((body) => !isEngraver(body))))} kB compressed (at most 200), and the engraver ${round(weigh(all.filter(isEngraver)))} kB`);
+  const weigh = (entries: readonly (readonly [string, Buffer])[]) => round(entries.reduce((sum, [, body]) => sum + gzipSync(body, { level: 9 }).length, 0) / 1000);
+  const ours = [...scripts].filter(([, body]) => !isEngraver(body));
+  console.log(
+    `scripts of the desk route: ${weigh(ours)} kB compressed (at most 200), ${weigh(ours.filter(([url]) => everywhere.has(url)))} kB of them on every page; the engraver ${weigh([...scripts].filter(([, body]) => isEngraver(body)))} kB`,
+  );
 }
 
 /** A saved edit against a route that answers before any work: one asked with a method it has not. */

@@ -1,6 +1,7 @@
 import type { Metadata } from 'next';
 import Link from 'next/link';
 import { redirect } from 'next/navigation';
+import { cache } from 'react';
 import { preload } from 'react-dom';
 import { Tag } from '@/components/ui';
 import { Desk } from '@/components/reading/desk';
@@ -22,36 +23,43 @@ interface DeskPageProps {
   readonly searchParams: Promise<{ readonly at?: string; readonly beside?: string; readonly margin?: string; readonly bar?: string }>;
 }
 
+/** Once for the page's title and its body. */
+const getOwnHead = cache(async (readingId: string) => {
+  const actor = await requireActor();
+  return { actor, head: await getHead(actor, readingId) };
+});
+
 async function getHead(actor: Actor, readingId: string): Promise<ReadingHead> {
   const deps = createDeps();
   return orNotFound(await findReading(deps.db, actor, readingId, deps.now()));
 }
 
 export async function generateMetadata({ params }: DeskPageProps): Promise<Metadata> {
-  const actor = await requireActor();
-  const head = await getHead(actor, (await params).readingId);
+  const { head } = await getOwnHead((await params).readingId);
   return { title: `${head.excerptTitle} · ${head.title}` };
 }
 
 export default async function DeskPage({ params, searchParams }: DeskPageProps) {
-  const actor = await requireActor();
   const { readingId } = await params;
+  const { actor, head } = await getOwnHead(readingId);
   const { at: atText, beside: besideId, margin, bar } = await searchParams;
   const at = Number(atText);
-  const head = await getHead(actor, readingId);
   const submissionId = head.kind === 'submission' ? await findOwnSubmissionOfReading(createDeps().db, actor, readingId) : null;
   if (submissionId) redirect(`/submissions/${submissionId}`);
   if (head.state === 'proposing' || head.state === 'failed') return <ProposingNote readingId={readingId} state={head.state} title={head.excerptTitle} />;
-  const reading = await loadReading(createDeps(), actor, head);
-  const readings = canUseLibrary(actor) ? await listReadingsOfExcerpts(createDeps().db, actor, [head.excerptId]) : [];
-  const others = readings.filter((r) => r.id !== readingId && r.state !== 'proposing' && r.state !== 'failed').map((r) => ({ id: r.id, title: r.title, by: nameOwner(actor, r) }));
-  const chosen = others.find((r) => r.id === besideId);
-  const beside = chosen && (await loadBeside(actor, chosen));
-  const spellings = listSpellings(await listCourses(createDeps().db, actor));
-  const courseId = head.kind === 'key' ? await findCourseOfKey(createDeps().db, actor, readingId) : null;
   const base = `/api/readings/${readingId}`;
   // The browser fetches it beside the scripts; the desk's own fetch finds it there.
   preload(`${base}/score`, { as: 'fetch', crossOrigin: 'anonymous' });
+  const { db } = createDeps();
+  const [reading, readings, courses, courseId] = await Promise.all([
+    loadReading(createDeps(), actor, head),
+    canUseLibrary(actor) ? listReadingsOfExcerpts(db, actor, [head.excerptId]) : [],
+    listCourses(db, actor),
+    head.kind === 'key' ? findCourseOfKey(db, actor, readingId) : null,
+  ]);
+  const others = readings.filter((r) => r.id !== readingId && r.state !== 'proposing' && r.state !== 'failed').map((r) => ({ id: r.id, title: r.title, by: nameOwner(actor, r) }));
+  const chosen = others.find((r) => r.id === besideId);
+  const beside = chosen && (await loadBeside(actor, chosen));
   return (
     <div className="h-[calc(100dvh-var(--spacing-header))]">
       <Desk
@@ -66,7 +74,7 @@ export default async function DeskPage({ params, searchParams }: DeskPageProps) 
         heading={<Heading head={head} actor={actor} />}
         actions={<DeskActions readingId={readingId} others={others} besideId={chosen?.id ?? null} staff={canUseLibrary(actor)} editable={canEditReading(actor, head.access)} />}
         key={chosen?.id ?? 'alone'}
-        spellings={spellings}
+        spellings={listSpellings(courses)}
         courseId={courseId}
         {...(beside ? { beside } : {})}
         {...(bar ? { openBar: bar } : {})}
