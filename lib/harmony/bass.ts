@@ -9,7 +9,7 @@ const ATTACK_REACH = 7;
 const FIGURE_QUARTERS = 2;
 /** A short note at least so many semitones above the bass is a figure's, not a step of the bass. */
 const FIGURE_LEAP = 5;
-/** So many notes struck together are a new chord, no figure. */
+/** So many different pitches struck together are a new chord, no figure. */
 const CHORD_SIZE = 3;
 
 /**
@@ -34,7 +34,7 @@ export function holdBass(sonorities: readonly Sonority[], ticksPerQuarter: numbe
 function isFigure(held: Note, lowest: Note, sonorities: readonly Sonority[], i: number, quarter: number): boolean {
   const rise = midiOf(lowest.pitch) - midiOf(held.pitch);
   const { start, attacked } = sonorities[i]!;
-  if (rise <= 0 || lowest.duration >= quarter || attacked.length >= CHORD_SIZE) return false;
+  if (rise <= 0 || lowest.duration >= quarter || new Set(attacked.map(({ pitch }) => pitch.fifths)).size >= CHORD_SIZE) return false;
   const reach = FIGURE_QUARTERS * quarter;
   return (rise >= FIGURE_LEAP && start - held.start < reach) || comesBack(held, sonorities, i, start + reach);
 }

@@ -77,6 +77,10 @@ export const CHORD_TERMS = [
   ['lowest-agrees', 'the lowest note of the span has the tone of this inversion'],
   ['lowest-agrees-first', 'the span begins with the tone of this inversion lowest'],
   ['bass-agrees-last', 'the span ends on the bass of this inversion'],
+  ['foreign-held-over', 'a foreign note is held over from before and moves on by step'],
+  ['foreign-anticipates', 'a foreign note at the end belongs to what follows'],
+  ['pedal-length', 'the bass is foreign and stays'],
+  ['pedal-upper-bass', 'above a foreign bass the lowest note has the tone of this inversion'],
   ['complete', 'all tones of the chord sound'],
   ['foreign-share', 'share of the sound that is foreign and stands plainly'],
   ['dominant-seventh-share', 'the seventh of the dominant seventh lasts through the span'],
@@ -109,7 +113,7 @@ export function fillChordTerms(row: Float32Array, sound: SpanSound, slices: Slic
   for (let i = 0; i < template.tones.length; i++) fillTone(row, sound, chord.root + template.tones[i]!, i);
   for (let i = template.tones.length; i < 4; i++) tonesFound[i] = -1;
   for (let i = 0; i < 4; i++) if (tonesFound[i]! >= 0) belongs[tonesFound[i]!] = 1;
-  fillForeign(row, sound, chord);
+  fillForeign(row, sound, slices, e, chord);
   fillBass(row, sound, chord);
   fillSeventh(row, sound, slices, e, chord);
   fillWhole(row, template.tones.length);
@@ -134,7 +138,7 @@ function fillTone(row: Float32Array, sound: SpanSound, bin: number, role: number
   for (let channel = 0; channel < CHANNELS; channel++) row[at + channel] = sound.sounding[found * CHANNELS + channel]!;
 }
 
-function fillForeign(row: Float32Array, sound: SpanSound, chord: Candidate): void {
+function fillForeign(row: Float32Array, sound: SpanSound, slices: Slices, e: number, chord: Candidate): void {
   let foreign = 0;
   let all = 0;
   for (const bin of sound.bins) {
@@ -149,6 +153,8 @@ function fillForeign(row: Float32Array, sound: SpanSound, chord: Candidate): voi
     row[AT['foreign-strikes']] = row[AT['foreign-strikes']]! + sound.strikes[bin]!;
     if (sound.atStart[bin] === 1) row[AT['foreign-at-start']] = 1;
     if (sound.atEnd[bin] === 1) row[AT['foreign-at-end']] = 1;
+    if (sound.heldOver[bin] === 1 && sound.sounding[bin * CHANNELS]! === 0) row[AT['foreign-held-over']] = row[AT['foreign-held-over']]! + sound.total[bin]!;
+    if (sound.atEnd[bin] === 1 && sound.atStart[bin] === 0 && startsWith(slices, e, bin)) row[AT['foreign-anticipates']] = 1;
     fillSpecialForeign(row, sound, chord, bin);
   }
   if (foreign === 0 && sound.bins.length > 0) row[AT['all-explained']] = 1;
@@ -187,6 +193,10 @@ function fillBass(row: Float32Array, sound: SpanSound, chord: Candidate): void {
   row[AT['bass-agrees']] = own;
   row[AT['bass-other-tone']] = other;
   row[AT['bass-foreign']] = Math.max(0, 1 - own - other);
+  if (own + other === 0 && sound.firstBass === sound.lastBass) {
+    row[AT['pedal-length']] = sound.beats;
+    row[AT['pedal-upper-bass']] = inversionOfBass(chord.root, chord.kind, sound.aboveBass) === chord.inversion ? 1 : 0;
+  }
   row[AT['bass-never']] = own === 0 ? 1 : 0;
   row[AT['lowest-agrees']] = inversionOfBass(chord.root, chord.kind, sound.lowest) === chord.inversion ? 1 : 0;
   row[AT['lowest-agrees-first']] = inversionOfBass(chord.root, chord.kind, sound.lowestAtStart) === chord.inversion ? 1 : 0;
@@ -243,7 +253,7 @@ export const HAND_CHORD_WEIGHTS: Readonly<Partial<Record<TermName, number>>> = {
   'foreign-on-beats': -0.05,
   'ninth-over-dominant': 0.4, 'suspended-fourth': 0.3, misspelled: -0.3,
   'root-missing': -1.2, 'third-missing': -0.7, 'fifth-missing': -0.3, 'seventh-missing': -1.3,
-  'all-explained': 0.4, 'bass-agrees': 0.83, 'bass-agrees-first': 0.2, 'lowest-agrees': 0.3, 'bass-foreign': -0.3, 'bass-never': -0.4,
+  'all-explained': 0.4, 'bass-agrees': 0.83, 'bass-agrees-first': 0.2, 'pedal-length': 0.2, 'pedal-upper-bass': 0.3, 'lowest-agrees': 0.3, 'bass-foreign': -0.3, 'bass-never': -0.4,
   'seventh-late': -0.1, 'minor-seventh-left-out': -0.1,
   'foreign-at-start': -0.1, 'foreign-at-end': 0,
   'length-seventh': -0.14, 'length-inverted': -0.14,

@@ -1,8 +1,9 @@
 import { CHORD_SPAN, type Lattice, keyOfState as importedKeyOfState } from './lattice';
-import { IMPOSSIBLE, type Transitions } from './transitions';
+import { IMPOSSIBLE as IMPORTED_IMPOSSIBLE, type Transitions } from './transitions';
 
 /** Imported values are bound once here: they are read in the innermost loops. */
 const keyOfState = importedKeyOfState;
+const IMPOSSIBLE = IMPORTED_IMPOSSIBLE;
 
 export interface SearchOptions {
   /** Arrivals considered at a boundary; how far below the best one they may lie; how many from other keys. */

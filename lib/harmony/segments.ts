@@ -45,6 +45,8 @@ export class SpanSound {
   /** 1 for a bin that sounds in the span's first slice, and in its last. */
   readonly atStart = new Uint8Array(BINS);
   readonly atEnd = new Uint8Array(BINS);
+  /** 1 for a bin that is held into the span from before, not struck where it begins. */
+  readonly heldOver = new Uint8Array(BINS);
   /** Beats from the span's start to the bin's first sounding. */
   readonly enters = new Float64Array(BINS);
   /** Beats during which a bin is the held bass. */
@@ -55,6 +57,7 @@ export class SpanSound {
   /** Bin and height of the lowest note heard, and the bin of the lowest at the span's start. */
   lowest = -1;
   lowestAtStart = -1;
+  aboveBass = -1;
   private height = Infinity;
   /** The largest changes of sound, and the moves of the bass on beats, after the first slice. */
   hiddenChange = 0;
@@ -86,6 +89,7 @@ export class SpanSound {
     this.strikes[bin] = 0;
     this.atStart[bin] = 0;
     this.atEnd[bin] = 0;
+    this.heldOver[bin] = 0;
   }
 
   addSlice(slices: Slices, i: number): void {
@@ -98,7 +102,10 @@ export class SpanSound {
       if (this.size === 0) this.firstBass = bass;
       this.lastBass = bass;
     }
-    if (this.size === 0) this.lowestAtStart = slices.lowestAtStart[i]!;
+    if (this.size === 0) {
+      this.lowestAtStart = slices.lowestAtStart[i]!;
+      this.aboveBass = slices.aboveBass[i]!;
+    }
     if (slices.lowestMidi[i]! < this.height) {
       this.height = slices.lowestMidi[i]!;
       this.lowest = slices.lowest[i]!;
@@ -121,7 +128,10 @@ export class SpanSound {
       this.bins.push(bin);
       this.enters[bin] = this.beats;
     }
-    if (this.size === 0 && slices.atStart[p] === 1) this.atStart[bin] = 1;
+    if (this.size === 0 && slices.atStart[p] === 1) {
+      this.atStart[bin] = 1;
+      if (slices.strikes[p] === 0) this.heldOver[bin] = 1;
+    }
     if (slices.atEnd[p] === 1) this.atEnd[bin] = 1;
     const slot = bin * CHANNELS + slices.channel[p]!;
     this.sounding[slot] = this.sounding[slot]! + beats;

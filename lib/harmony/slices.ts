@@ -32,6 +32,8 @@ export interface Slices {
   readonly lowest: Int16Array;
   readonly lowestMidi: Int16Array;
   readonly lowestAtStart: Int16Array;
+  /** Bin of the lowest note at the slice's start that is not the held bass's pitch class: what a pedal carries. */
+  readonly aboveBass: Int16Array;
   readonly attacks: Uint8Array;
   readonly first: Int32Array;
   readonly bin: Uint8Array;
@@ -65,7 +67,12 @@ export function gatherSlices(score: Score, sonorities: readonly Sonority[], star
  */
 function mayBegin(sonority: Sonority, before: Sonority, bassMoves: boolean): boolean {
   if (sonority.bar !== before.bar || sonority.level < 4) return true;
-  return bassMoves && sonority.attacked.length >= 2;
+  return bassMoves && countPitches(sonority.attacked) >= 2;
+}
+
+/** Different pitches of notes, octaves counted once: a doubling changes nothing. */
+function countPitches(notes: readonly Note[]): number {
+  return new Set(notes.map(({ pitch }) => pitch.fifths)).size;
 }
 
 function beatOf(score: Score, sonority: Sonority): number {
@@ -85,6 +92,7 @@ class SliceColumns {
   private readonly lowest: number[] = [];
   private readonly lowestMidi: number[] = [];
   private readonly lowestAtStart: number[] = [];
+  private readonly aboveBass: number[] = [];
   private readonly attacks: number[] = [];
   private readonly first: number[] = [];
   private readonly bin: Uint8Array;
@@ -122,7 +130,9 @@ class SliceColumns {
     this.lowest.push(clampBin(lowest.pitch.fifths));
     this.lowestAtStart.push(clampBin(lowest.pitch.fifths));
     this.lowestMidi.push(midiOf(lowest.pitch));
-    this.attacks.push(Math.min(255, sonority.attacked.length));
+    const above = bass && sonority.sounding.find(({ pitch }) => (pitch.fifths - bass.pitch.fifths) % 12 !== 0);
+    this.aboveBass.push(above ? clampBin(above.pitch.fifths) : -1);
+    this.attacks.push(countPitches(sonority.attacked));
     this.first.push(this.size);
   }
 
@@ -195,6 +205,7 @@ class SliceColumns {
       lowest: Int16Array.from(this.lowest),
       lowestMidi: Int16Array.from(this.lowestMidi),
       lowestAtStart: Int16Array.from(this.lowestAtStart),
+      aboveBass: Int16Array.from(this.aboveBass),
       attacks: Uint8Array.from(this.attacks),
       first: Int32Array.from([...this.first, size]),
       bin: this.bin.slice(0, size),

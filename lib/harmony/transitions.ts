@@ -4,7 +4,7 @@ import { CHORD_SPAN, keyOfState as importedKeyOfState, inversionOfState as impor
 import { type Material } from './material';
 import { type TermSink } from './node-terms';
 import { relationOf, signatureDistance } from './relation';
-import { DOMINANT_SEVENTH, KIND_COUNT, MAJOR, TEMPLATES } from './templates';
+import { DOMINANT_SEVENTH as IMPORTED_DOMINANT_SEVENTH, KIND_COUNT, MAJOR as IMPORTED_MAJOR, TEMPLATES as IMPORTED_TEMPLATES } from './templates';
 import { TRANSITION_AT } from './transition-terms';
 import {
   type AppliedTarget,
@@ -23,6 +23,9 @@ import {
 import { AT, type Tables, type Weights } from './weights';
 
 /** Imported values are bound once here: they are read in the innermost loops. */
+const DOMINANT_SEVENTH = IMPORTED_DOMINANT_SEVENTH;
+const MAJOR = IMPORTED_MAJOR;
+const TEMPLATES = IMPORTED_TEMPLATES;
 const tonicOf = importedTonicOf;
 const modeOf = importedModeOf;
 const keyOfState = importedKeyOfState;

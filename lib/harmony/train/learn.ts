@@ -3,7 +3,7 @@ import { scoreKeys } from '../keys-tried';
 import { type Lattice, buildLattice } from '../lattice';
 import { sumBackward } from '../posterior';
 import { type Prepared } from '../prepare';
-import { LATTICE_OPTIONS, SEARCH_OPTIONS } from '../search-options';
+import { LEARNING_LATTICE, LEARNING_SEARCH } from '../search-options';
 import { Transitions } from '../transitions';
 import { AT, type Weights } from '../weights';
 import { type Gold, creditNodes, keepGold } from './gold';
@@ -26,10 +26,7 @@ export interface LearningOptions {
   readonly margin: number;
 }
 
-export const LEARNING: LearningOptions = { epochs: 8, seed: 1, namedRate: 0.02, labelRate: 0.04, fineRate: 0.04, margin: 1 };
-
-/** Learning sees a narrower lattice than the search: what is far off teaches nothing. */
-const TRAINING_LATTICE = { ...LATTICE_OPTIONS, nodesPerSegment: 24, nodeMargin: 8 };
+export const LEARNING: LearningOptions = { epochs: 10, seed: 1, namedRate: 0.02, labelRate: 0.04, fineRate: 0.04, margin: 1 };
 
 /** The reference is found by its credit alone; few rivals matter. */
 const WANTED_SEARCH = { beam: 12, beamMargin: 60, otherKeys: 6 };
@@ -87,12 +84,12 @@ function learnItem(item: TrainingItem, weights: Weights, gradient: Gradient, opt
   const { material, keys, keyCount } = item.prepared;
   if (material.slices.count === 0) return 0;
   const scored = scoreKeys(material.slices, material.evidence, weights, keys, keyCount);
-  const lattice = buildLattice(material, scored, weights, { ...TRAINING_LATTICE, keep: keepGold(item.gold, material) });
+  const lattice = buildLattice(material, scored, weights, { ...LEARNING_LATTICE, keep: keepGold(item.gold, material) });
   const transitions = new Transitions(material, weights);
   const { credit, all } = creditNodes(lattice, material, item.gold);
   const wanted = findWanted(lattice, transitions, credit);
   const cost = credit.map((beats, n) => options.margin * (all[n]! - beats));
-  const found = search(lattice, transitions, SEARCH_OPTIONS, cost);
+  const found = search(lattice, transitions, LEARNING_SEARCH, cost);
   if (found.total === -Infinity || wanted.length === 0) return 0;
   const instance: Instance = { material, keys: scored, lattice, transitions, weights };
   gatherGradient(gradient, instance, wanted, found, sumBackward(found, cost));
