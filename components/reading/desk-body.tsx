@@ -39,7 +39,7 @@ export function DeskBody(props: DeskBodyProps) {
   const saving = useSaving(context.powers.write ? base : null, props.userId, state, dispatch);
   const remarks = useRemarks(base);
   const label = getSelected(state);
-  const why = useWhy(context.powers.proposals ? score : null, state.reading, label.id);
+  const why = useWhy(context.powers.proposals && desk.drawn ? score : null, state.reading, label.id);
   const toneMarks = useMemo(() => findToneMarks(state.reading, label.id, desk.arrows ? why : null), [state.reading, label.id, desk.arrows, why]);
   const settled = useMemo(() => state.reading.labels.filter((l) => !isGiven(l) && isSettled(l)).length, [state.reading.labels, isGiven]);
 

@@ -47,7 +47,7 @@ export function Toolbar({ context, keys, spelling, saving, heading, actions, zoo
         <Tool context={context} keys={keys} id="smaller" label="Smaller">−</Tool>
         <span className="tabular hidden w-11 text-center text-small sm:inline" aria-live="polite">{Math.round(zoom * 100)} %</span>
         <Tool context={context} keys={keys} id="larger" label="Larger">+</Tool>
-        <Tool context={context} keys={keys} id="help" label="All keys">?</Tool>
+        <Tool context={context} keys={keys} id="help" label="All keys" wideOnly>?</Tool>
       </span>
       <Button size="small" kind="plain" className="lg:hidden" onClick={onMargin}>Margin</Button>
       {actions}
@@ -63,10 +63,12 @@ interface ToolProps {
   readonly kind?: 'plain' | 'quiet';
   readonly disabled?: boolean;
   readonly pressed?: boolean;
+  /** Of no use on a phone. */
+  readonly wideOnly?: boolean;
   readonly children: ReactNode;
 }
 
-function Tool({ context, keys, id, label, kind = 'quiet', disabled = false, pressed, children }: ToolProps) {
+function Tool({ context, keys, id, label, kind = 'quiet', disabled = false, pressed, wideOnly = false, children }: ToolProps) {
   const command = getCommand(id);
   if (!isOffered(command, context.powers)) return null;
   return (
@@ -77,7 +79,7 @@ function Tool({ context, keys, id, label, kind = 'quiet', disabled = false, pres
       title={[command.words, ...keys.keysOf(command).slice(0, 1).map((key) => `(${showKey(key)})`)].join(' ')}
       aria-label={label}
       aria-pressed={pressed}
-      className={classNames('min-w-8', pressed && 'bg-selection')}
+      className={classNames('min-w-8', pressed && 'bg-selection', wideOnly && 'hidden sm:inline-flex')}
       onClick={() => runCommand(context, id)}
     >
       {children}

@@ -36,6 +36,8 @@ export interface Desk {
   isGiven(label: Label): boolean;
   /** Brings a label into view as soon as its sheet is drawn, and gives it the keyboard if wanted. */
   await(label: Label, keyboard: boolean): void;
+  /** Some sheet is drawn: what is not needed for that may be fetched now. */
+  readonly drawn: boolean;
   /** A sheet was drawn: what stands above and below what is read off it. */
   noteGeometry(geometry: SheetGeometry): void;
 }
@@ -69,6 +71,7 @@ export function useDesk(props: DeskProps, score: Score, startZoom: number, state
   const sound = useSound(score, state, dispatch);
   // At first the label the desk opens on; at the beginning there is nothing to bring into view.
   const awaited = useRef<Awaited | null>(props.openAt === undefined && !props.openBar ? null : { label: getSelected(state), keyboard: false });
+  const [drawn, setDrawn] = useState(false);
   const geometries = useRef(new Map<number, SheetGeometry>());
   const powers = useMemo(() => powersOf(mode, rules, props.beside !== undefined), [mode, rules, props.beside]);
   const beside = useBeside(props.beside, state, dispatch);
@@ -80,6 +83,7 @@ export function useDesk(props: DeskProps, score: Score, startZoom: number, state
   const noteGeometry = useCallback((geometry: SheetGeometry) => {
     const first = geometry.bars[0];
     if (first) geometries.current.set(first.bar, geometry);
+    setDrawn(true);
     const { label, keyboard } = awaited.current ?? {};
     const element = label && findBarAt(geometry, label.start) ? document.querySelector<HTMLElement>(`[data-label="${label.id}"]`) : null;
     if (!element) return;
@@ -123,7 +127,7 @@ export function useDesk(props: DeskProps, score: Score, startZoom: number, state
       stop: sound.stop,
     },
   };
-  return { context, opened, open, zoom, arrows, sound, keys, setKeys, beside, page, setPage, remarkTurn, marginOpen, setMarginOpen, isGiven: given, await: awaitLabel, noteGeometry };
+  return { context, opened, open, zoom, arrows, sound, keys, setKeys, beside, page, setPage, remarkTurn, marginOpen, setMarginOpen, isGiven: given, await: awaitLabel, drawn, noteGeometry };
 }
 
 /** The first of the notes left over, once the margin shows them. */

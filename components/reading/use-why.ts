@@ -7,12 +7,12 @@ import type { Score } from '@/lib/score/score';
 
 type Explain = typeof explainLabel;
 
-/** The score is drawn first: the engine's own code and its weights are fetched when the page has come to rest. */
-const REST_MS = 250;
+/** The engine's own code and its weights are fetched when the score is drawn and the page has come to rest. */
+const REST_MS = 120;
 
 /**
- * The evidence for a label, worked out here by the engine's own code; null for a blank, without a score to look at, and
- * until that code is there.
+ * The evidence for a label, worked out here by the engine's own code; null for a blank, as long as there is no score to look
+ * at, and until that code is there.
  */
 export function useWhy(score: Score | null, reading: Reading, labelId: string): Why | null {
   const [explain, setExplain] = useState<{ readonly run: Explain } | null>(null);
