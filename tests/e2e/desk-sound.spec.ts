@@ -1,3 +1,4 @@
+import AxeBuilder from '@axe-core/playwright';
 import { expect, test } from '@playwright/test';
 import { labels, startReading } from '../support/desk-page';
 import { signIn } from '../support/e2e';
@@ -31,6 +32,8 @@ test('sound: silent until asked; by keyboard the score, the chord and the reduct
   await expect(cursor).toBeHidden();
 
   const strip = page.getByRole('region', { name: 'Sound' });
+  const axe = await new AxeBuilder({ page }).withTags(['wcag2a', 'wcag2aa', 'wcag21aa', 'wcag22aa']).analyze();
+  expect(axe.violations.map(({ id, nodes }) => [id, nodes[0]?.html])).toEqual([]);
   await strip.getByRole('slider', { name: 'Quarters a minute' }).fill('200');
   await strip.getByRole('checkbox', { name: 'Again and again' }).check();
   await strip.getByRole('button', { name: 'Selection' }).click();

@@ -107,6 +107,14 @@ describe('two versions of one label', () => {
     return reduceDesk(mine, { kind: 'conflicted', conflict: { edit: mine.pending[0]!, version: 4, theirs } });
   };
 
+  it('waits when the choice is put off, with both versions kept', () => {
+    const before = overtaken();
+    const off = reduceDesk(before, { kind: 'put-off' });
+    expect(off.conflict).toMatchObject({ putOff: true, theirs });
+    expect(off.pending).toEqual(before.pending);
+    expect(reduceDesk(off, { kind: 'choose-now' }).conflict).toMatchObject({ putOff: false });
+  });
+
   it('keeps theirs when taken, and every other edit of mine', () => {
     const state = reduceDesk(overtaken(), { kind: 'take-theirs' });
     expect(numeralsOf(state.reading)).toBe('C: I viio6 ii6 I');
