@@ -157,14 +157,13 @@ function storedLabel(row: typeof labels.$inferSelect, others: readonly Alternati
   };
 }
 
+type ReadingRow = Pick<typeof readings.$inferSelect, 'id' | 'startTick' | 'endTick'>;
+
 /** Reads the content back; whoever calls it has checked who may see the reading. Alternatives of a key are among `others`. */
-export async function unsafeLoadReadingContent(
-  db: Db,
-  reading: { readonly id: string; readonly startTick: number; readonly endTick: number },
-): Promise<StoredReading> {
+export async function unsafeLoadReadingContent(db: Db, reading: ReadingRow, content: { readonly alternatives: boolean } = { alternatives: true }): Promise<StoredReading> {
   const regionRows = await db.select().from(keyRegions).where(eq(keyRegions.readingId, reading.id)).orderBy(asc(keyRegions.startTick));
   const labelRows = await db.select().from(labels).where(eq(labels.readingId, reading.id)).orderBy(asc(labels.position));
-  const alternatives = await loadAlternatives(db, labelRows.map((row) => row.id));
+  const alternatives = await loadAlternatives(db, content.alternatives ? labelRows.map((row) => row.id) : []);
   return {
     start: reading.startTick,
     end: reading.endTick,

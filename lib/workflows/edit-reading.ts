@@ -64,7 +64,8 @@ function refusalOf(actor: Actor, reading: ReadingHead): AppError {
 }
 
 async function makeEdit(deps: Deps, actor: Actor, head: ReadingHead, input: EditReadingInput): Promise<Result<ReadingNews, AppError>> {
-  const content = readingOf(await unsafeLoadReadingContent(deps.db, head));
+  // Whether a change fits does not depend on the engine's runners-up.
+  const content = readingOf(await unsafeLoadReadingContent(deps.db, head, { alternatives: false }));
   const refusal = await checkFrame(deps, head, input.change);
   if (refusal) return err(refusal);
   const applied = applyChange(content, input.change);
