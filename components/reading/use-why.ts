@@ -1,6 +1,6 @@
 'use client';
 
-import { useEffect, useMemo, useState } from 'react';
+import { useDeferredValue, useEffect, useMemo, useState } from 'react';
 import type { explainLabel } from '@/lib/harmony/explain';
 import type { Reading, Why } from '@/lib/harmony/reading';
 import type { Score } from '@/lib/score/score';
@@ -28,8 +28,10 @@ export function useWhy(score: Score | null, reading: Reading, labelId: string): 
       clearTimeout(timer);
     };
   }, [isWanted]);
+  // The edit itself is seen first.
+  const [later, laterId] = [useDeferredValue(reading), useDeferredValue(labelId)];
   return useMemo(() => {
-    const index = reading.labels.findIndex((label) => label.id === labelId);
-    return explain && score && reading.labels[index]?.numeral ? explain.run(score, reading, index) : null;
-  }, [explain, score, reading, labelId]);
+    const index = later.labels.findIndex((label) => label.id === laterId);
+    return explain && score && later.labels[index]?.numeral ? explain.run(score, later, index) : null;
+  }, [explain, score, later, laterId]);
 }

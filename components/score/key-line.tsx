@@ -1,3 +1,4 @@
+import { memo } from 'react';
 import { classNames } from '@/components/ui';
 import type { KeyRegion } from '@/lib/harmony/reading';
 import { formatKeyForPeople } from '@/lib/theory/key';
@@ -12,7 +13,7 @@ interface KeyLineProps {
 }
 
 /** A bracket per region with its key's name, repeated small where a system breaks it. */
-export function KeyLine({ geometry, regions, onOpen }: KeyLineProps) {
+export const KeyLine = memo(function KeyLine({ geometry, regions, onOpen }: KeyLineProps) {
   const spans = layKeys(geometry, regions);
   return (
     <>
@@ -24,7 +25,7 @@ export function KeyLine({ geometry, regions, onOpen }: KeyLineProps) {
       ))}
     </>
   );
-}
+});
 
 function laneTop(geometry: SheetGeometry, span: KeySpan): number {
   return geometry.systems[span.system]?.laneTop ?? 0;

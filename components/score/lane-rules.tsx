@@ -1,3 +1,4 @@
+import { memo } from 'react';
 import type { SheetGeometry } from './geometry';
 import { type LaneModel, NUMERAL_LINE } from './lane-model';
 
@@ -5,7 +6,7 @@ import { type LaneModel, NUMERAL_LINE } from './lane-model';
 const SHORTEST = 12;
 
 /** The hairlines of the numeral line: a tick up to each label's note, and a line for as long as the label lasts. */
-export function LaneRules({ geometry, model }: { readonly geometry: SheetGeometry; readonly model: LaneModel }) {
+export const LaneRules = memo(function LaneRules({ geometry, model }: { readonly geometry: SheetGeometry; readonly model: LaneModel }) {
   const middle = (system: number, row: number) =>
     (geometry.systems[system]?.laneTop ?? 0) + NUMERAL_LINE.top + row * NUMERAL_LINE.rowHeight + 16.5;
   return (
@@ -29,7 +30,7 @@ export function LaneRules({ geometry, model }: { readonly geometry: SheetGeometr
       </g>
     </svg>
   );
-}
+});
 
 /** Where the next label of a row begins, less a little air. */
 function nextInRow(model: LaneModel, system: number, row: number, after: number): number {

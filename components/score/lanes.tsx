@@ -1,6 +1,6 @@
 'use client';
 
-import { type ReactNode, memo, useMemo } from 'react';
+import { type ReactNode, memo, useMemo, useState } from 'react';
 import { type Shape, ShapeIcon, TONE_TEXT, type Tone, classNames } from '@/components/ui';
 import type { Label, Reading } from '@/lib/harmony/reading';
 import { findPivot } from '@/lib/harmony/edit-keys';
@@ -47,9 +47,10 @@ export function Lanes(props: LanesProps) {
   const { geometry, reading, sheet } = props;
   const start = geometry.bars[0]?.start ?? 0;
   const end = geometry.bars.at(-1)?.end ?? 0;
-  const labels = useMemo(() => reading.labels.filter((l) => l.start < end && l.end > start), [reading.labels, start, end]);
+  const labels = useSameLabels(useMemo(() => reading.labels.filter((l) => l.start < end && l.end > start), [reading.labels, start, end]));
   const faces = useMemo(() => facesOf(labels, sheet), [labels, sheet]);
-  const pivots = useMemo(() => pivotsOf(reading, labels, sheet), [reading, labels, sheet]);
+  const { regions } = reading;
+  const pivots = useMemo(() => pivotsOf(regions, labels, sheet), [regions, labels, sheet]);
   const model = useMemo(
     () => layLabels(geometry, labels, (label) => faceWidth(faces.get(label.id) ?? null), (label) => belowWidth(pivots.get(label.id))),
     [geometry, labels, faces, pivots],
@@ -83,14 +84,22 @@ export function Lanes(props: LanesProps) {
   );
 }
 
+/** The same array as before as long as it holds the same labels: an edit elsewhere lays nothing out anew here. */
+function useSameLabels(found: readonly Label[]): readonly Label[] {
+  const [kept, keep] = useState(found);
+  const isSame = kept.length === found.length && kept.every((label, i) => label === found[i]);
+  if (!isSame) keep(found);
+  return isSame ? kept : found;
+}
+
 function facesOf(labels: readonly Label[], sheet: ConventionSheet): ReadonlyMap<string, NumeralParts | null> {
   return new Map(labels.map((label, i) => [label.id, faceOf(label, labels[i - 1]?.numeral ?? null, sheet)]));
 }
 
 /** Pivots of a sheet: what they are in the key after them, and that key's name. */
-function pivotsOf(reading: Reading, labels: readonly Label[], sheet: ConventionSheet): ReadonlyMap<string, PivotFace> {
+function pivotsOf(regions: Reading['regions'], labels: readonly Label[], sheet: ConventionSheet): ReadonlyMap<string, PivotFace> {
   const found = labels.flatMap((label) => {
-    const pivot = findPivot(reading, label);
+    const pivot = findPivot({ regions }, label);
     return pivot ? [[label.id, { key: formatKeyForPeople(pivot.key), parts: typesetNumeral(pivot.numeral, pivot.key.mode, sheet) }] as const] : [];
   });
   return new Map(found);

@@ -114,7 +114,7 @@ export function countRewritten(before: Reading, after: Reading): number {
 }
 
 /** How a pivot is read in the key that begins after it; null for a label that is none, or where no key begins after it. */
-export function findPivot(reading: Reading, label: Label): { readonly key: Key; readonly numeral: Numeral } | null {
+export function findPivot(reading: Pick<Reading, 'regions'>, label: Label): { readonly key: Key; readonly numeral: Numeral } | null {
   const region = label.pivot ? reading.regions.find((r) => r.start === label.end) : undefined;
   if (!region || !label.numeral) return null;
   return { key: region.key, numeral: reframeNumeral(label.numeral, label.key, region.key) };

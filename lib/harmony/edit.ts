@@ -62,11 +62,13 @@ export function applyChange(reading: Reading, change: Change): Result<Reading, E
   const lost = change.regions.before.some((a) => !reading.regions.some((b) => equalRegions(a, b)));
   if (gone.length > 0 || lost) return err(stale(gone.map((l) => l.id)));
   const labels = reading.labels.filter((l) => !change.labels.before.some((b) => b.id === l.id));
-  const regions = reading.regions.filter((r) => !change.regions.before.some((b) => equalRegions(b, r)));
+  const { before, after } = change.regions;
+  const regions = reading.regions.filter((r) => !before.some((b) => equalRegions(b, r)));
   const changed: Reading = {
     ...reading,
     labels: [...labels, ...change.labels.after].sort((a, b) => a.start - b.start),
-    regions: [...regions, ...change.regions.after].sort((a, b) => a.start - b.start),
+    // Untouched, they stay the same value: what was laid out for them need not be laid out anew.
+    regions: before.length + after.length === 0 ? reading.regions : [...regions, ...after].sort((a, b) => a.start - b.start),
   };
   return findTileFaults(changed).length > 0 ? err(stale(change.labels.after.map((l) => l.id))) : ok(changed);
 }
