@@ -7,7 +7,7 @@ const SOURCES = ['**/*.ts', '**/*.tsx'];
 const PURE = ['lib/{theory,score,harmony,marking,partwriting,handout}/**', 'lib/{result,errors,vocabularies}.ts'];
 
 export default tseslint.config(
-  { ignores: ['node_modules/', '.next/', '.next-*/', '.data/', 'coverage/', 'test-results/', 'playwright-report/', '**/*.d.ts', '**/*.d.mts'] },
+  { ignores: ['node_modules/', '.next/', '.next-*/', '.data/', 'coverage/', 'test-results/', 'playwright-report/', '**/*.bundle.mjs', '**/*.d.ts', '**/*.d.mts'] },
   { linterOptions: { noInlineConfig: true, reportUnusedDisableDirectives: 'error' } },
   ...coreWebVitals,
   ...tseslint.configs.strict.map((config) => ({ ...config, files: SOURCES })),

@@ -49,4 +49,5 @@ function main(args: readonly string[]): number {
   return 0;
 }
 
-if (process.argv[1] === import.meta.filename) process.exitCode = main(process.argv.slice(2));
+// Of a bundle that holds this file, too, only the one named after it is this command.
+if (path.basename(process.argv[1] ?? '').startsWith('train.')) process.exitCode = main(process.argv.slice(2));
