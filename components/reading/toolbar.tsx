@@ -79,7 +79,7 @@ function Tool({ context, keys, id, label, kind = 'quiet', disabled = false, pres
       title={[command.words, ...keys.keysOf(command).slice(0, 1).map((key) => `(${showKey(key)})`)].join(' ')}
       aria-label={label}
       aria-pressed={pressed}
-      className={classNames('min-w-8', pressed && 'bg-selection', wideOnly && 'hidden sm:inline-flex')}
+      className={classNames('min-w-8', pressed && 'bg-selection', wideOnly && 'max-sm:hidden')}
       onClick={() => runCommand(context, id)}
     >
       {children}

@@ -16,7 +16,7 @@ export function DeskActions({ readingId, others, besideId, staff, editable }: De
   return (
     <span className="flex items-center gap-1">
       {others.length > 0 ? (
-        <Menu trigger={<Button size="small" className="hidden sm:inline-flex">Side by side</Button>}>
+        <Menu trigger={<Button size="small" className="max-sm:hidden">Side by side</Button>}>
           <MenuHeading>Lay beside this reading</MenuHeading>
           {others.map(({ id, title, by }) => (
             <MenuLink key={id} href={`/desk/${readingId}?beside=${id}`}>
