@@ -11,25 +11,22 @@ import { editReading } from '@/lib/workflows/edit-reading';
 import { listRevisions } from '@/lib/workflows/list-revisions';
 import { readNews, readReading } from '@/lib/workflows/read-reading';
 import { numeralsOf } from '../../support/reading-edits';
-import { type TestServices, openServices } from '../../support/services';
-import { addDepartment, addExcerpt, addPerson, addReading, addScore } from '../../support/world';
+import type { TestServices } from '../../support/services';
+import { type TwoEditors, addSharedReading, openTwoEditors } from './two-editors';
 
 let services: TestServices;
 let me: Actor;
 let colleague: Actor;
-let excerptId: string;
 let readingId: string;
+let editors: TwoEditors;
 
 beforeAll(async () => {
-  services = await openServices();
-  const departmentId = await addDepartment(services.deps, 'History');
-  me = await addPerson(services.deps, departmentId, 'instructor', 'me');
-  colleague = await addPerson(services.deps, departmentId, 'assistant', 'colleague');
-  excerptId = await addExcerpt(services.deps, me, await addScore(services.deps, me));
+  editors = await openTwoEditors('History');
+  ({ services, me, colleague } = editors);
 });
 afterAll(() => services.close());
 beforeEach(async () => {
-  readingId = await addReading(services.deps, me.departmentId, excerptId, { ownerId: me.userId, kind: 'person', shared: 'edit' });
+  readingId = await addSharedReading(editors);
 });
 
 const read = async () => unwrap(await readReading(services.deps, me, { readingId }));
