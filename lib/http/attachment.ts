@@ -1,5 +1,6 @@
 interface Attachment {
-  readonly bytes: Uint8Array<ArrayBuffer>;
+  /** Text goes out as UTF-8. */
+  readonly bytes: Uint8Array<ArrayBuffer> | string;
   readonly fileName: string;
   readonly mediaType: string;
 }

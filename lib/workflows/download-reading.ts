@@ -15,7 +15,7 @@ import type { Score } from '@/lib/score/score';
 import { formatLabelsAsCsv } from '@/lib/score/write-csv';
 import { isZip } from '@/lib/score/zip';
 import type { Deps } from './deps';
-import { MXL_MEDIA_TYPE, MUSICXML_MEDIA_TYPE } from './get-score-file';
+import { MXL_MEDIA_TYPE, MUSICXML_MEDIA_TYPE, type ScoreFile } from './get-score-file';
 import { loadReading } from './read-reading';
 
 export const downloadReadingInput = z.object({
@@ -25,14 +25,8 @@ export const downloadReadingInput = z.object({
 });
 export type DownloadReadingInput = z.infer<typeof downloadReadingInput>;
 
-export interface ReadingFile {
-  readonly bytes: Uint8Array<ArrayBuffer>;
-  readonly fileName: string;
-  readonly mediaType: string;
-}
-
 /** A reading to take along, for whoever may see it. */
-export async function downloadReading(deps: Deps, actor: Actor, { readingId, form }: DownloadReadingInput): Promise<Result<ReadingFile, AppError>> {
+export async function downloadReading(deps: Deps, actor: Actor, { readingId, form }: DownloadReadingInput): Promise<Result<ScoreFile, AppError>> {
   const head = await findReading(deps.db, actor, readingId, deps.now());
   const file = head && (await unsafeFindScoreFile(deps.db, head.scoreId));
   const bytes = file && (await deps.storage.get(file.sha256));

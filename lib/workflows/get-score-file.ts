@@ -5,6 +5,7 @@ import { type Result, err, ok } from '@/lib/result';
 import type { Deps } from './deps';
 import type { ScoreInput } from './library-input';
 
+/** A file of a score, or made of one, under the name it is to be saved under. */
 export interface ScoreFile {
   readonly bytes: Uint8Array<ArrayBuffer>;
   readonly fileName: string;
